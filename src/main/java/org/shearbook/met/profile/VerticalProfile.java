@@ -1,0 +1,7 @@
+package org.shearbook.met.profile;
+
+/** The vertical profile everybody speaks; being written. */
+public final class VerticalProfile {
+    private VerticalProfile() {
+    }
+}

@@ -1,0 +1,8 @@
+/**
+ * Checks reported values, flags them and builds a clean profile from what passed. Deletes nothing. May use
+ * {@code profile} and {@code decode}.
+ */
+@NullMarked
+package org.shearbook.met.quality;
+
+import org.jspecify.annotations.NullMarked;
