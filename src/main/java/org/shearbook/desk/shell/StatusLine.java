@@ -1,0 +1,7 @@
+package org.shearbook.desk.shell;
+
+/** A short text in the top bar, asked for with each page: who holds the desk, for example. */
+public interface StatusLine {
+
+    String text();
+}

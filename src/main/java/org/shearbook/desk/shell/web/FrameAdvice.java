@@ -1,0 +1,57 @@
+package org.shearbook.desk.shell.web;
+
+import jakarta.servlet.http.HttpServletRequest;
+import java.time.Clock;
+import java.time.Instant;
+import java.util.Comparator;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Set;
+import java.util.stream.Collectors;
+import org.jspecify.annotations.Nullable;
+import org.shearbook.desk.shell.MenuEntry;
+import org.shearbook.desk.shell.PageBanner;
+import org.shearbook.desk.shell.Show;
+import org.shearbook.desk.shell.StatusLine;
+import org.springframework.security.core.Authentication;
+import org.springframework.security.core.GrantedAuthority;
+import org.springframework.stereotype.Controller;
+import org.springframework.web.bind.annotation.ControllerAdvice;
+import org.springframework.web.bind.annotation.ModelAttribute;
+
+/** Gives every page its frame. */
+@ControllerAdvice(annotations = Controller.class)
+class FrameAdvice {
+
+    private final Clock clock;
+    private final Show show;
+    private final List<MenuEntry> menu;
+    private final List<StatusLine> statuses;
+    private final List<PageBanner> banners;
+
+    FrameAdvice(Clock clock, Show show, List<MenuEntry> menu, List<StatusLine> statuses, List<PageBanner> banners) {
+        this.clock = clock;
+        this.show = show;
+        this.menu = menu.stream().sorted(Comparator.comparingInt(MenuEntry::order)).toList();
+        this.statuses = statuses;
+        this.banners = banners;
+    }
+
+    @ModelAttribute("frame")
+    FrameView frame(HttpServletRequest request, @Nullable Authentication person) {
+        return view(request, person);
+    }
+
+    FrameView view(HttpServletRequest request, @Nullable Authentication person) {
+        Instant now = clock.instant();
+        Set<String> roles = person == null ? Set.of()
+                : person.getAuthorities().stream().map(GrantedAuthority::getAuthority).collect(Collectors.toSet());
+        Map<String, List<MenuEntry>> groups = person == null ? Map.of() : menu.stream()
+                .filter(entry -> entry.roles().isEmpty() || entry.roles().stream().anyMatch(role -> roles.contains("ROLE_" + role)))
+                .collect(Collectors.groupingBy(MenuEntry::group, LinkedHashMap::new, Collectors.toList()));
+        return new FrameView(show.utcToSecond(now), now.toEpochMilli(), person == null ? null : person.getName(),
+                person == null ? List.of() : statuses.stream().map(StatusLine::text).toList(),
+                banners.stream().map(PageBanner::text).toList(), groups, request.getServletPath());
+    }
+}
