@@ -9,7 +9,7 @@ public final class MessageDecoders {
 
     /** The formats this desk reads. */
     public static MessageDecoders all() {
-        return new MessageDecoders(List.of());
+        return new MessageDecoders(List.of(new IgraDerivedDecoder(), new IgraDecoder(), new CsvSoundingDecoder()));
     }
 
     MessageDecoders(List<MessageDecoder> decoders) {
