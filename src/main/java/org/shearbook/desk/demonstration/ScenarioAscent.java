@@ -23,15 +23,13 @@ import org.jspecify.annotations.Nullable;
  * @param layerWindChange       wind change through the shear layer [m s⁻¹]
  * @param layerStability        what the layer adds to N² at its centre [10⁻⁴ s⁻²]
  * @param tropopauseSharpness   half the depth over which N² rises at the tropopause [m]
- * @param seed                  of the measurement noise; chosen so that the noisy ascent lies on the same side of
- *                              Ri = ¼ as the noise-free one, at the 200 m window
  * @param cirrus                whether 8.4 to 8.9 km is near saturation over ice
  * @param windDropOut           whether the receiver lost the wind between FL240 and FL260
  */
 record ScenarioAscent(
         Site station, Instant nominalAt, double surfaceTemperature, double tropopauseHeight, double jetSpeed, double jetHeight,
         double widthBelow, double widthAbove, double calmSpeed, double layerHeight, double layerHalfDepth, double layerWindChange,
-        double layerStability, double tropopauseSharpness, long seed, boolean cirrus, boolean windDropOut) {
+        double layerStability, double tropopauseSharpness, boolean cirrus, boolean windDropOut) {
 
     /** First day of the scenario, 0000Z. */
     static final Instant DAY_ONE = Instant.parse("2031-03-11T00:00:00Z");
@@ -94,7 +92,7 @@ record ScenarioAscent(
         Instant nominal = DAY_ONE.plus(Duration.ofDays(Long.parseLong(part[1]) - 1)).plus(Duration.ofHours(Long.parseLong(part[2])));
         return new ScenarioAscent(Site.valueOf(part[0]), nominal, surfaceTemperature, tropopause, jetSpeed, jetHeight, widthBelow, widthAbove,
                 calmSpeed, layerHeight, halfDepth, windChange, stability, title.equals("TARQUIDD 2 12") ? 150 : 250,
-                ScenarioSeeds.of(title), title.equals("KELBRITH 2 12"), title.equals("KELBRITH 2 12") || title.equals("KELBRITH 3 00"));
+                title.equals("KELBRITH 2 12"), title.equals("KELBRITH 2 12") || title.equals("KELBRITH 3 00"));
     }
 
     /** The ascent of this name, for example {@code KELBRITH 2 12}. */
