@@ -26,7 +26,8 @@ export function mount(root) {
     const wanted = event.key.toUpperCase();
     const target = [...root.querySelectorAll('[data-key]')]
       .find(it => it.dataset.key.toUpperCase() === wanted && !it.disabled && it.getClientRects().length > 0);
-    if (target) { event.preventDefault(); target.focus(); target.click(); }
+    // the focus stays where the person is working
+    if (target) { event.preventDefault(); target.click(); }
   });
 
   for (const button of root.querySelectorAll('[data-letters-switch]')) {
