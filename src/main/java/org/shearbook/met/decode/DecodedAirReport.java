@@ -36,15 +36,26 @@ public record DecodedAirReport(
     /** How a report came to be: verification.md A.1. */
     public enum ReportClass {
         /** Voluntary, subjective: a null exists only where the crew says so. */
-        VOL,
+        VOL(NullPolicy.EXPLICIT),
         /** Special air-report: positives only. */
-        SPC,
-        /** Automatic, sent when a threshold is crossed. */
-        TRG,
+        SPC(NullPolicy.NONE),
+        /** Automatic, sent when a threshold is crossed; {@link NullPolicy#HEARTBEAT} where routine messages come too. */
+        TRG(NullPolicy.NONE),
         /** Automatic at a routine interval, nulls included. */
-        EDR,
+        EDR(NullPolicy.SYSTEMATIC),
         /** From the recorder after the flight. */
-        QAR
+        QAR(NullPolicy.SYSTEMATIC);
+
+        private final NullPolicy nullPolicy;
+
+        ReportClass(NullPolicy nullPolicy) {
+            this.nullPolicy = nullPolicy;
+        }
+
+        /** What it means that reports of this class say nothing. */
+        public NullPolicy nullPolicy() {
+            return nullPolicy;
+        }
     }
 
     public enum Cloud { CLEAR, IN_CLOUD, UNKNOWN }
