@@ -9,7 +9,7 @@ public final class MessageDecoders {
 
     /** The formats this desk reads. */
     public static MessageDecoders all() {
-        return new MessageDecoders(List.of(new IgraDerivedDecoder(), new IgraDecoder(), new CsvSoundingDecoder()));
+        return new MessageDecoders(List.of(new IgraDerivedDecoder(), new IgraDecoder(), new CsvSoundingDecoder(), new PilotReportDecoder()));
     }
 
     MessageDecoders(List<MessageDecoder> decoders) {

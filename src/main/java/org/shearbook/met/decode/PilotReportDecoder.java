@@ -26,6 +26,8 @@ import org.shearbook.met.profile.Units;
  */
 public final class PilotReportDecoder implements MessageDecoder {
 
+    private static final String FORMAT = "pilot report";
+
     /** Longer than any report. What is longer has lost its line ends and goes to a person. */
     static final int LONGEST_REPORT = 4_000;
 
@@ -42,7 +44,7 @@ public final class PilotReportDecoder implements MessageDecoder {
 
     @Override
     public String format() {
-        return "PILOT_REPORT";
+        return FORMAT;
     }
 
     @Override
@@ -126,7 +128,7 @@ public final class PilotReportDecoder implements MessageDecoder {
                 rejected.add(new Rejection(1, 0, "NO_REPORT", "The bulletin holds no report. If one was expected ask its sender to repeat it.",
                         text.text()));
             }
-            return new Decoding("PILOT_REPORT", messages, rejected);
+            return new Decoding(FORMAT, messages, rejected);
         }
 
         /** Splits a line at its equals signs: each piece is a report, a part of one, or nothing known. */
