@@ -1,0 +1,5 @@
+package org.shearbook.desk.airreport;
+
+/** What became of a report that was handed over for keeping. */
+public record Kept(AirReportId id, int version) {
+}
