@@ -22,15 +22,20 @@ class DeskHolderLine implements StatusLine {
     }
 
     @Override
+    public String label() {
+        return holdings.find(AsKnownAt.now()).filter(holding -> !holding.isVacant()).isPresent() ? "Desk held by" : "Desk";
+    }
+
+    @Override
     public String text() {
         DeskHolding holding = holdings.find(AsKnownAt.now()).orElse(null);
         if (holding == null) {
-            return "Desk vacant";
+            return "vacant";
         }
         if (holding.holder() == null) {
-            return "Desk vacant since " + show.utc(holding.since());
+            return "vacant since " + show.utc(holding.since());
         }
         String name = people.find(holding.holder(), AsKnownAt.now()).map(Person::displayName).orElse(holding.holder());
-        return "Desk held by " + name + " since " + show.utc(holding.since());
+        return name + " since " + show.utc(holding.since());
     }
 }

@@ -1,11 +1,13 @@
 package org.shearbook.desk.shell.web;
 
+import jakarta.servlet.http.Cookie;
 import jakarta.servlet.http.HttpServletRequest;
 import java.time.Clock;
 import java.time.Instant;
 import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Set;
 import java.util.stream.Collectors;
@@ -24,13 +26,15 @@ import org.springframework.web.bind.annotation.ModelAttribute;
 @ControllerAdvice(annotations = Controller.class)
 class FrameAdvice {
 
+    private final ShellSettings settings;
     private final Clock clock;
     private final Show show;
     private final List<MenuEntry> menu;
     private final List<StatusLine> statuses;
     private final List<PageBanner> banners;
 
-    FrameAdvice(Clock clock, Show show, List<MenuEntry> menu, List<StatusLine> statuses, List<PageBanner> banners) {
+    FrameAdvice(ShellSettings settings, Clock clock, Show show, List<MenuEntry> menu, List<StatusLine> statuses, List<PageBanner> banners) {
+        this.settings = settings;
         this.clock = clock;
         this.show = show;
         this.menu = menu.stream().sorted(Comparator.comparingInt(MenuEntry::order)).toList();
@@ -50,8 +54,26 @@ class FrameAdvice {
         Map<String, List<MenuEntry>> groups = person == null ? Map.of() : menu.stream()
                 .filter(entry -> entry.roles().isEmpty() || entry.roles().stream().anyMatch(role -> roles.contains("ROLE_" + role)))
                 .collect(Collectors.groupingBy(MenuEntry::group, LinkedHashMap::new, Collectors.toList()));
-        return new FrameView(show.utcToSecond(now), now.toEpochMilli(), person == null ? null : person.getName(),
-                person == null ? List.of() : statuses.stream().map(StatusLine::text).toList(),
-                banners.stream().map(PageBanner::text).toList(), groups, request.getServletPath());
+        return new FrameView(settings.office(), now, show.utcToSecond(now), person == null ? null : nameOf(person),
+                person == null ? List.of() : statuses.stream().map(line -> new FrameView.StatusCell(line.label(), line.text())).toList(),
+                banners.stream().map(PageBanner::text).toList(), groups, request.getServletPath(),
+                chosen(request, "shearbook-theme", "dark", "light"), chosen(request, "shearbook-brightness", "day", "evening", "night"));
+    }
+
+    /** Name and roles, in words. */
+    private static String nameOf(Authentication person) {
+        String roles = person.getAuthorities().stream().map(GrantedAuthority::getAuthority).filter(authority -> authority.startsWith("ROLE_"))
+                .map(authority -> authority.substring(5).toLowerCase(Locale.ROOT)).sorted().collect(Collectors.joining(", "));
+        return person.getName() + (roles.isEmpty() ? "" : ", " + roles);
+    }
+
+    /** The value of a display cookie if it is one of those allowed, else the first of them. */
+    private static String chosen(HttpServletRequest request, String cookie, String... allowed) {
+        for (Cookie sent : request.getCookies() == null ? new Cookie[0] : request.getCookies()) {
+            if (sent.getName().equals(cookie) && List.of(allowed).contains(sent.getValue())) {
+                return sent.getValue();
+            }
+        }
+        return allowed[0];
     }
 }
