@@ -31,7 +31,8 @@ public final class DepthRule {
      * wavelength {@code 7.06 × 2d}, growth rate {@code S_max × }{@link #relativeGrowthRate}{@code (min Ri)}.
      *
      * <p><b>Limits.</b> Real profiles spread the ratio of wavelength to depth from about 5 to 8. ΔV is taken between
-     * the heights where Ri passes ½, so shear beyond the layer is left out and background shear inside is counted.
+     * the heights where Ri passes ½, so the outer parts of a tanh layer are left out: in constant stability the
+     * wavelength comes out 25 % short at min Ri 0.1 and 40 % short at 0.2. Background shear inside is counted.
      *
      * @param layer a shear layer
      * @return scales; stable when the smallest Ri is ¼ or more, or the wind does not change across the layer

@@ -6,7 +6,8 @@ package org.shearbook.met.profile;
  * @param height      geopotential height above mean sea level [m]
  * @param pressure    [Pa], positive
  * @param temperature [K], positive
- * @param dewPoint    over water [K]; NaN when humidity is not known, which counts as dry air
+ * @param dewPoint    over water [K]; NaN when humidity is not known, which counts as dry air; its vapour pressure must
+ *                    be below the pressure
  */
 public record ThermodynamicLevel(double height, double pressure, double temperature, double dewPoint) {
 
@@ -15,6 +16,10 @@ public record ThermodynamicLevel(double height, double pressure, double temperat
                 || Double.isInfinite(pressure) || Double.isInfinite(temperature) || dewPoint <= 0 || Double.isInfinite(dewPoint)) {
             throw new IllegalArgumentException("a level needs finite height and positive pressure and temperature, not height "
                     + height + " m, pressure " + pressure + " Pa, temperature " + temperature + " K, dew point " + dewPoint + " K");
+        }
+        if (MoistThermodynamics.saturationVapourPressureOverWater(dewPoint) >= pressure) {
+            throw new IllegalArgumentException("dew point " + dewPoint + " K at " + height + " m means more vapour pressure than the "
+                    + pressure + " Pa of the air");
         }
     }
 

@@ -18,7 +18,7 @@ final class CoordinateRangeCheck implements QualityCheck {
                 level.flags.add(QualityFlag.PRESSURE_RANGE);
                 level.pressure = Double.NaN;
             }
-            if (level.hasHeight() && !(level.height >= LEAST_HEIGHT && level.height <= GREATEST_HEIGHT)) {
+            if (level.hasHeight() && !isPossibleHeight(level.height)) {
                 level.flags.add(QualityFlag.HEIGHT_RANGE);
                 level.height = Double.NaN;
             }
@@ -26,5 +26,9 @@ final class CoordinateRangeCheck implements QualityCheck {
                 level.refuse(QualityFlag.NO_VERTICAL_COORDINATE);
             }
         }
+    }
+
+    static boolean isPossibleHeight(double height) {
+        return height >= LEAST_HEIGHT && height <= GREATEST_HEIGHT;
     }
 }

@@ -73,8 +73,14 @@ final class LevelsUnderCheck {
             return flags.contains(QualityFlag.BELOW_GROUND) || flags.contains(QualityFlag.NO_VERTICAL_COORDINATE);
         }
 
+        /** That of dry air while the humidity can't be true at this pressure. */
         double virtualTemperature() {
-            return MoistThermodynamics.virtualTemperature(pressure, reported.temperature(), dewPoint);
+            return MoistThermodynamics.virtualTemperature(pressure, reported.temperature(), hasPossibleHumidity() ? dewPoint : Double.NaN);
+        }
+
+        /** Whether there is a dew point whose vapour pressure is at most half of the pressure. */
+        boolean hasPossibleHumidity() {
+            return MoistThermodynamics.saturationVapourPressureOverWater(dewPoint) <= 0.5 * pressure;
         }
 
         double potentialTemperature() {

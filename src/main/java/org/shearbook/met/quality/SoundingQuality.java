@@ -22,7 +22,7 @@ public final class SoundingQuality {
     // Ranges first, so that nonsense takes no part in hydrostatics; spikes before jumps and gaps, which go by neighbours.
     private static final List<QualityCheck> CHECKS = List.of(
             new CoordinateRangeCheck(), new BelowGroundCheck(), new TemperatureRangeCheck(), new WindRangeCheck(),
-            new VerticalCoordinateCompletion(), new DuplicateLevelCheck(), new StrictOrderCheck(),
+            new VerticalCoordinateCompletion(), new HumidityRangeCheck(), new DuplicateLevelCheck(), new StrictOrderCheck(),
             new SpikeCheck(), new SuperadiabaticCheck(), new WindJumpCheck(), new GapCheck(), new RoundingCheck(), new UnitSlipCheck());
 
     private SoundingQuality() {

@@ -17,7 +17,7 @@ import org.shearbook.met.profile.StandardAtmosphere;
  * <ol>
  * <li><b>Order.</b> Of the levels that report both, sorted by height, the largest set in which pressure does not rise
  *     is trusted. A level outside it keeps its height if that fits the pressure of its neighbours to 60 m plus what
- *     0.5 hPa of rounding explains, and is refused otherwise.
+ *     rounding to whole hPa explains, and is refused otherwise.
  * <li><b>Hydrostatic.</b> The thickness between neighbouring trusted levels is compared with the hypsometric one,
  *     {@code (R T_v / g) ln(p₁/p₂)}, T_v linear in ln p; tolerance 60 m (practice for heights coded in decametres),
  *     plus 1 % and the rounding. A level that disagrees with both neighbours, which agree with each other, loses its
@@ -30,7 +30,7 @@ final class VerticalCoordinateCompletion implements QualityCheck {
 
     private static final double TOLERANCE = 60;
     private static final double THICKNESS_SHARE = 0.01;
-    private static final double ROUNDING_OF_PRESSURE = 50;
+    private static final double ROUNDING_OF_PRESSURE = 100;
     /** R T / g at 250 K [m]. */
     private static final double SCALE_HEIGHT = 7318;
 
@@ -49,6 +49,7 @@ final class VerticalCoordinateCompletion implements QualityCheck {
         checkHydrostatic(byPressure, hypsometric);
         completeHeights(sounding, byPressure, hypsometric);
         completePressures(levels, byPressure);
+        refuseImpossibleHeights(levels);
     }
 
     private static void putSurfaceAtElevation(List<LevelsUnderCheck.Level> levels, double elevation) {
@@ -259,6 +260,15 @@ final class VerticalCoordinateCompletion implements QualityCheck {
     private static void compute(LevelsUnderCheck.Level level, double height) {
         level.height = height;
         level.flags.add(QualityFlag.HEIGHT_COMPUTED);
+    }
+
+    private static void refuseImpossibleHeights(List<LevelsUnderCheck.Level> levels) {
+        for (LevelsUnderCheck.Level level : levels) {
+            if (level.hasHeight() && !CoordinateRangeCheck.isPossibleHeight(level.height)) {
+                level.refuse(QualityFlag.HEIGHT_RANGE);
+                level.height = Double.NaN;
+            }
+        }
     }
 
     private static void completePressures(List<LevelsUnderCheck.Level> levels, List<LevelsUnderCheck.Level> known) {
