@@ -43,6 +43,7 @@ class AccessRules {
                         .requestMatchers(HttpMethod.POST, "/api/v1/messages")
                         .access(anyOf("ROLE_FORECASTER", "ROLE_SCIENTIST", "ROLE_SUPERVISOR", "ROLE_OBSERVER", "SCOPE_messages"))
                         .requestMatchers(HttpMethod.GET, "/api/v1/**").access(peopleOr("SCOPE_read"))
+                        .requestMatchers(HttpMethod.PUT, "/api/v1/stations", "/api/v1/fixes").hasRole("ADMINISTRATOR")
                         .requestMatchers("/intake/messages").hasAnyRole("FORECASTER", "SCIENTIST", "SUPERVISOR", "OBSERVER")
                         .requestMatchers(HttpMethod.POST, "/stations/**").hasRole("ADMINISTRATOR")
                         .anyRequest().access(anyOf(PEOPLE)))
