@@ -48,8 +48,8 @@ public final class CsvSoundingDecoder implements MessageDecoder {
         MessageText text = MessageText.ofUnicode(bytes);
         try {
             return new Decoding(format(), List.of(new CsvSoundingTable(text).read()), List.of());
-        } catch (CsvSoundingTable.Refused refused) {
-            return new Decoding(format(), List.of(), List.of(new Rejection(refused.line, refused.column, refused.code, refused.getMessage(), text.text())));
+        } catch (Unreadable refused) {
+            return new Decoding(format(), List.of(), List.of(refused.asRejection(text.text())));
         }
     }
 

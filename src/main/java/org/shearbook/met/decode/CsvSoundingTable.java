@@ -48,21 +48,6 @@ final class CsvSoundingTable {
             Map.entry("temperature_missing_boundary", Significance.TEMPERATURE_MISSING_BOUNDARY),
             Map.entry("wind_missing_boundary", Significance.WIND_MISSING_BOUNDARY));
 
-    /** Ends the reading of one file; never leaves the decoder. */
-    static final class Refused extends Exception {
-        private static final long serialVersionUID = 1L;
-        final int line;
-        final int column;
-        final String code;
-
-        Refused(int line, int column, String code, String text) {
-            super(text, null, false, false);
-            this.line = line;
-            this.column = column;
-            this.code = code;
-        }
-    }
-
     private record Offence(int line, int column, String code, String text) {
     }
 
@@ -87,16 +72,16 @@ final class CsvSoundingTable {
         this.text = text;
     }
 
-    DecodedSounding read() throws Refused {
+    DecodedSounding read() throws Unreadable {
         int header = CsvSoundingDecoder.headerIndex(text);
         if (header < 0) {
-            throw new Refused(1, 0, "HEADER_MISSING", "There is no header row. Begin the table with a row of column names that carry their units, for example pressure_hPa,geopotential_height_m,temperature_C,wind_direction_deg,wind_speed_kt.");
+            throw new Unreadable(1, 0, "HEADER_MISSING", "There is no header row. Begin the table with a row of column names that carry their units, for example pressure_hPa,geopotential_height_m,temperature_C,wind_direction_deg,wind_speed_kt.");
         }
         int firstRow = readHeader(header);
         readMetadata();
         readRows(firstRow);
         if (rows.isEmpty()) {
-            throw new Refused(headerLine, 0, "NO_LEVELS", "Below the header there is no row with values. Send the whole file.");
+            throw new Unreadable(headerLine, 0, "NO_LEVELS", "Below the header there is no row with values. Send the whole file.");
         }
         resolveDoubtfulMarks();
         List<ReportedLevel> levels = levels();
@@ -104,7 +89,7 @@ final class CsvSoundingTable {
         return sounding(levels);
     }
 
-    private int readHeader(int index) throws Refused {
+    private int readHeader(int index) throws Unreadable {
         MessageText.Line line = text.lines().get(index);
         headerLine = line.number();
         String header = text.text(line);
@@ -167,7 +152,7 @@ final class CsvSoundingTable {
         return false;
     }
 
-    private void settleColumns() throws Refused {
+    private void settleColumns() throws Unreadable {
         List<SoundingColumn> withoutUnit = new ArrayList<>();
         for (int i = 0; i < columns.size(); i++) {
             SoundingColumn column = columns.get(i);
@@ -177,7 +162,7 @@ final class CsvSoundingTable {
                     remarks.add(headerLine, column.column(), "COLUMN_IGNORED", "Column '" + column.name() + "' is none this desk reads; it stays in the raw text.");
                 }
             } else if (!column.unknownUnit().isEmpty()) {
-                throw new Refused(headerLine, column.column(), "UNIT_UNKNOWN", "'" + column.unknownUnit() + "' is not a unit of " + quantity.words
+                throw new Unreadable(headerLine, column.column(), "UNIT_UNKNOWN", "'" + column.unknownUnit() + "' is not a unit of " + quantity.words
                         + " that this desk knows. Convert the column and write " + quantity.header + ".");
             } else if (position.containsKey(quantity)) {
                 remarks.add(headerLine, column.column(), "COLUMN_TWICE", "There are two columns with " + quantity.words + "; '"
@@ -198,18 +183,18 @@ final class CsvSoundingTable {
             throw unitsMissing(withoutUnit);
         }
         if (position.keySet().stream().noneMatch(Quantity::isVertical)) {
-            throw new Refused(headerLine, 0, "NO_VERTICAL_COORDINATE", "No column gives pressure or height. Add pressure_hPa or geopotential_height_m.");
+            throw new Unreadable(headerLine, 0, "NO_VERTICAL_COORDINATE", "No column gives pressure or height. Add pressure_hPa or geopotential_height_m.");
         }
     }
 
-    private Refused unitsMissing(List<SoundingColumn> withoutUnit) {
+    private Unreadable unitsMissing(List<SoundingColumn> withoutUnit) {
         StringBuilder message = new StringBuilder("The unit is not stated, and this desk does not guess it:");
         for (SoundingColumn column : withoutUnit) {
             message.append(" column '").append(column.name()).append("', write ").append(column.quantity().header).append(';');
         }
         message.setCharAt(message.length() - 1, '.');
         message.append(" Rename the columns, or put a row of units below the header.");
-        return new Refused(headerLine, withoutUnit.get(0).column(), "UNITS_MISSING", message.toString());
+        return new Unreadable(headerLine, withoutUnit.get(0).column(), "UNITS_MISSING", message.toString());
     }
 
     private void readMetadata() {
@@ -238,7 +223,7 @@ final class CsvSoundingTable {
         return value.substring(0, end).strip();
     }
 
-    private void readRows(int from) throws Refused {
+    private void readRows(int from) throws Unreadable {
         for (int i = from; i < text.lines().size(); i++) {
             MessageText.Line line = text.lines().get(i);
             String row = text.text(line);
@@ -249,10 +234,10 @@ final class CsvSoundingTable {
         }
     }
 
-    private void readRow(List<DelimitedLine.Cell> cells, int line) throws Refused {
+    private void readRow(List<DelimitedLine.Cell> cells, int line) throws Unreadable {
         for (int i = columns.size(); i < cells.size(); i++) {
             if (!cells.get(i).text().isEmpty()) {
-                throw new Refused(line, cells.get(i).column(), "ROW_TOO_LONG", "The row has " + cells.size() + " cells, the header " + columns.size()
+                throw new Unreadable(line, cells.get(i).column(), "ROW_TOO_LONG", "The row has " + cells.size() + " cells, the header " + columns.size()
                         + ". If commas stand for decimal points, separate the columns with semicolons; if not, remove what is too much.");
             }
         }
@@ -473,7 +458,7 @@ final class CsvSoundingTable {
         offences.add(new Offence(row.line(), place(row, quantity), code, message));
     }
 
-    private void refuseIfOffended() throws Refused {
+    private void refuseIfOffended() throws Unreadable {
         if (offences.isEmpty()) {
             return;
         }
@@ -486,7 +471,7 @@ final class CsvSoundingTable {
             }
             message.setCharAt(message.length() - 1, '.');
         }
-        throw new Refused(first.line(), first.column(), first.code(), message.toString());
+        throw new Unreadable(first.line(), first.column(), first.code(), message.toString());
     }
 
     private DecodedSounding sounding(List<ReportedLevel> levels) {

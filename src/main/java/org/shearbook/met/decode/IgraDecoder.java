@@ -103,9 +103,8 @@ public final class IgraDecoder implements MessageDecoder {
                             + header.levels() + " levels, but more follow. They were not added to that sounding: a header between them may be lost. "
                             + "Compare with the archive's file.", text.raw(end, until)));
                 }
-            } catch (IgraHeader.Unreadable e) {
-                rejected.add(new Rejection(line, e.column, "IGRA_HEADER",
-                        e.getMessage() + " The sounding was not kept.", text.raw(from, until)));
+            } catch (Unreadable e) {
+                rejected.add(e.asRejection(text.raw(from, until)));
             }
             from = until;
         }

@@ -24,17 +24,6 @@ record IgraHeader(String stationId, @Nullable Instant nominalAt, @Nullable Insta
 
     private static final int LATEST_HOUR_OF_THE_SAME_DATE = 20;
 
-    /** Thrown inside the room only, for a header that can't be read. */
-    static final class Unreadable extends Exception {
-        private static final long serialVersionUID = 1L;
-        final int column;
-
-        Unreadable(int column, String text) {
-            super(text, null, false, false);
-            this.column = column;
-        }
-    }
-
     /** Whether a line has the shape of such a header: by its fixed columns, not by its values. */
     static boolean isShapeOf(CharSequence line) {
         if (line.length() < 36 || line.charAt(0) != '#') {
@@ -69,7 +58,7 @@ record IgraHeader(String stationId, @Nullable Instant nominalAt, @Nullable Insta
      */
     static IgraHeader read(String line, int lineNumber, int levelsFrom, RemarkList remarks) throws Unreadable {
         if (!isShapeOf(line)) {
-            throw new Unreadable(1, "This is not a header record: station in columns 2-12, year 14-17, month 19-20, "
+            throw new Unreadable(lineNumber, 1, "IGRA_HEADER", "This is not a header record: station in columns 2-12, year 14-17, month 19-20, "
                     + "day 22-23, hour 25-26, release time 28-31, number of levels 33-36. Compare the line with the archive's.");
         }
         int year = number(line, 14, 17);
@@ -82,19 +71,19 @@ record IgraHeader(String stationId, @Nullable Instant nominalAt, @Nullable Insta
         try {
             date = LocalDateTime.of(year, month, day, 0, 0);
         } catch (DateTimeException noSuchDay) {
-            throw new Unreadable(14, "There is no such day: " + line.substring(13, 23) + ". Compare the line with the archive's.");
+            throw new Unreadable(lineNumber, 14, "IGRA_HEADER", "There is no such day: " + line.substring(13, 23) + ". Compare the line with the archive's.");
         }
         if (hour > 23 && hour != 99) {
-            throw new Unreadable(25, "The hour " + hour + " is neither 00 to 23 nor 99 (missing). Compare the line with the archive's.");
+            throw new Unreadable(lineNumber, 25, "IGRA_HEADER", "The hour " + hour + " is neither 00 to 23 nor 99 (missing). Compare the line with the archive's.");
         }
         int levels;
         try {
             levels = Integer.parseInt(line.substring(levelsFrom - 1, 36).strip());
         } catch (NumberFormatException notANumber) {
-            throw new Unreadable(levelsFrom, "The number of levels can't be read: '" + line.substring(levelsFrom - 1, 36) + "'. Compare the line with the archive's.");
+            throw new Unreadable(lineNumber, levelsFrom, "IGRA_HEADER", "The number of levels can't be read: '" + line.substring(levelsFrom - 1, 36) + "'. Compare the line with the archive's.");
         }
         if (levels < 0) {
-            throw new Unreadable(levelsFrom, "The number of levels is negative. Compare the line with the archive's.");
+            throw new Unreadable(lineNumber, levelsFrom, "IGRA_HEADER", "The number of levels is negative. Compare the line with the archive's.");
         }
         Instant nominalAt = hour == 99 ? null : date.plusHours(hour).toInstant(ZoneOffset.UTC);
         if (nominalAt == null) {

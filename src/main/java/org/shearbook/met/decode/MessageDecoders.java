@@ -9,7 +9,12 @@ public final class MessageDecoders {
 
     /** The formats this desk reads. */
     public static MessageDecoders all() {
-        return new MessageDecoders(List.of(new IgraDerivedDecoder(), new IgraDecoder(), new CsvSoundingDecoder(), new PilotReportDecoder()));
+        return new MessageDecoders(List.of(
+                new IgraDerivedDecoder(),
+                new IgraDecoder(),
+                new TempDecoder(),
+                new CsvSoundingDecoder(),
+                new PilotReportDecoder()));
     }
 
     MessageDecoders(List<MessageDecoder> decoders) {

@@ -1,0 +1,146 @@
+package org.shearbook.met.decode;
+
+import java.util.EnumSet;
+import java.util.Set;
+import org.shearbook.met.decode.ReportedLevel.Significance;
+import org.shearbook.met.profile.Units;
+
+/**
+ * Parts of FM 32 PILOT. B and D: winds at heights, three to a leading group {@code 9tuuu} in units of 300 m
+ * ({@code 8tuuu}: 500 m). Stations of the United States count in thousands of feet instead; the report does not say
+ * so, hence the block of the station decides and a remark tells. A and C: winds at standard levels, {@code 55nPP} or
+ * {@code 44nPP} with the first of them, and the maximum wind. What follows {@code 21212} repeats such winds under
+ * national rules and is left alone.
+ */
+final class PilotWinds {
+
+    private static final double UNIT = 300;
+    private static final double LARGE_UNIT = 500;
+    private static final int[] STANDARD = {1000, 925, 850, 700, 500, 400, 300, 250, 200, 150, 100, 70, 50, 30, 20, 10};
+
+    private final TempCursor cursor;
+    private final boolean upper;
+    private final double unit;
+
+    /**
+     * @param upper     part C or D
+     * @param stationId its block decides the unit of height
+     */
+    PilotWinds(TempCursor cursor, boolean upper, String stationId) {
+        this.cursor = cursor;
+        this.upper = upper;
+        boolean inFeet = stationId.startsWith("70") || stationId.startsWith("72") || stationId.startsWith("74");
+        this.unit = inFeet ? Units.THOUSAND_FEET : UNIT;
+        if (inFeet && cursor.hasMore()) {
+            cursor.remark(cursor.at(), "HEIGHT_UNIT_ASSUMED", "Heights were taken as thousands of feet, the practice of this station's country; the code's own unit is 300 m.");
+        }
+    }
+
+    void readHeights() {
+        while (cursor.hasMore() && !ends()) {
+            int at = cursor.at();
+            String group = cursor.group(at).text();
+            boolean leads = cursor.group(at).isValue() && (group.charAt(0) == '9' || group.charAt(0) == '8') && TempCode.isDigit(group.charAt(1));
+            if (!leads) {
+                cursor.remarkShift(at, "no heights stand here; the group was dropped.");
+                cursor.moveTo(at + 1);
+                continue;
+            }
+            readThree(group);
+        }
+    }
+
+    private void readThree(String heights) {
+        int index = cursor.at() + 1;
+        double step = heights.charAt(0) == '8' ? LARGE_UNIT : unit;
+        for (int i = 2; i < 5; i++) {
+            if (!TempCode.isDigit(heights.charAt(i))) {
+                continue;
+            }
+            TempGroup group = cursor.group(index);
+            if (!TempCode.isPlausibleWind(group, cursor.speedUnit())) {
+                if (index >= cursor.size()) {
+                    cursor.remark(cursor.size() - 1, "REPORT_CUT_OFF", "The report ends inside a level. What stands before was read; ask for the report again.");
+                } else {
+                    cursor.remarkShift(index, "the winds behind '" + heights + "' that follow were dropped.");
+                    index++;
+                    while (index < cursor.size() && cursor.group(index).text().charAt(0) != '9') {
+                        index++;
+                    }
+                }
+                break;
+            }
+            int count = 10 * (heights.charAt(1) - '0') + heights.charAt(i) - '0';
+            Set<Significance> significance = EnumSet.of(count == 0 ? Significance.SURFACE : Significance.SIGNIFICANT_WIND);
+            cursor.addLevel(Double.NaN, count == 0 ? Double.NaN : count * step, Double.NaN, Double.NaN, cursor.wind(index), significance);
+            index++;
+        }
+        cursor.moveTo(index);
+    }
+
+    void readPressures() {
+        while (cursor.hasMore() && !ends()) {
+            int at = cursor.at();
+            TempGroup group = cursor.group(at);
+            String text = group.text();
+            int first = group.isValue() && (text.startsWith("55") || text.startsWith("44")) ? indexOf(text.substring(3)) : -1;
+            if (first >= 0 && TempCode.isDigit(text.charAt(2))) {
+                readFrom(first, text.charAt(2) - '0');
+            } else if (group.isValue() && (text.charAt(0) == '7' || text.charAt(0) == '6')) {
+                readMaximumWind(text);
+            } else {
+                cursor.remarkShift(at, "no level begins here; the group was dropped.");
+                cursor.moveTo(at + 1);
+            }
+        }
+    }
+
+    private void readFrom(int first, int count) {
+        int index = cursor.at() + 1;
+        for (int i = first; i < Math.min(first + count, STANDARD.length) && index < cursor.size(); i++, index++) {
+            if (!TempCode.isPlausibleWind(cursor.group(index), cursor.speedUnit())) {
+                cursor.remarkShift(index, "the winds of this row that follow were dropped.");
+                break;
+            }
+            cursor.addLevel(100.0 * STANDARD[i], Double.NaN, Double.NaN, Double.NaN, cursor.wind(index), EnumSet.of(Significance.STANDARD));
+        }
+        cursor.moveTo(index);
+    }
+
+    /** {@code 77PPP} with a pressure, or {@code 7HHHH} with a height in tens of metres. */
+    private void readMaximumWind(String text) {
+        int at = cursor.at();
+        if (text.equals("77999")) {
+            cursor.moveTo(at + 1);
+            return;
+        }
+        if (!TempCode.areDigits(text, 1, 5) || !TempCode.isPlausibleWind(cursor.group(at + 1), cursor.speedUnit())) {
+            cursor.remarkShift(at, "the maximum wind was dropped.");
+            cursor.moveTo(at + 1);
+            return;
+        }
+        boolean byPressure = text.startsWith("77") || text.startsWith("66");
+        double pressure = byPressure ? Integer.parseInt(text.substring(2)) * (upper ? 10.0 : 100.0) : Double.NaN;
+        double height = byPressure ? Double.NaN : 10.0 * Integer.parseInt(text.substring(1));
+        cursor.addLevel(pressure, height, Double.NaN, Double.NaN, cursor.wind(at + 1), EnumSet.of(Significance.MAXIMUM_WIND));
+        cursor.moveTo(at + 2);
+        TempGroup shear = cursor.group(at + 2);
+        if (shear.isValue() && shear.text().charAt(0) == '4' && !TempCursor.isLaterSection(shear.text()) && indexOf(shear.text().substring(3)) < 0) {
+            cursor.moveTo(at + 3);
+        }
+    }
+
+    private boolean ends() {
+        return cursor.endsLevels(cursor.at()) || cursor.group(cursor.at()).text().equals("21212");
+    }
+
+    private static int indexOf(String figures) {
+        for (int i = 0; i < STANDARD.length; i++) {
+            int code = STANDARD[i] == 1000 ? 0 : STANDARD[i] >= 100 ? STANDARD[i] / 10 : STANDARD[i];
+            if (TempCode.areDigits(figures, 0, 2) && Integer.parseInt(figures) == code) {
+                return i;
+            }
+        }
+        return -1;
+    }
+}
