@@ -1,6 +1,5 @@
 package org.shearbook.desk.demonstration;
 
-import jakarta.annotation.PostConstruct;
 import jakarta.servlet.FilterChain;
 import jakarta.servlet.ServletException;
 import jakarta.servlet.http.HttpServletRequest;
@@ -23,14 +22,7 @@ import org.springframework.web.filter.OncePerRequestFilter;
 @Order(Ordered.HIGHEST_PRECEDENCE)
 class DemonstrationGuard extends OncePerRequestFilter {
 
-    private final String serverAddress;
-
-    DemonstrationGuard(@Value("${server.address:}") String serverAddress) {
-        this.serverAddress = serverAddress;
-    }
-
-    @PostConstruct
-    void refuseOtherAddresses() throws IOException {
+    DemonstrationGuard(@Value("${server.address:}") String serverAddress) throws IOException {
         if (serverAddress.isBlank() || !InetAddress.getByName(serverAddress).isLoopbackAddress()) {
             throw new IllegalStateException("The demonstration has accounts whose passwords everybody knows, so it starts on a loopback address only. "
                     + "Set server.address=127.0.0.1, or leave out the profile demo.");

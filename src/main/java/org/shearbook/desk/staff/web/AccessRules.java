@@ -1,5 +1,7 @@
 package org.shearbook.desk.staff.web;
 
+import jakarta.servlet.http.HttpServletResponse;
+import java.io.IOException;
 import java.util.List;
 import org.shearbook.desk.shell.Problem;
 import org.shearbook.desk.staff.KeyRing;
@@ -15,8 +17,11 @@ import org.springframework.security.authorization.AuthorityAuthorizationManager;
 import org.springframework.security.config.annotation.web.builders.HttpSecurity;
 import org.springframework.security.web.SecurityFilterChain;
 import org.springframework.security.web.access.intercept.RequestAuthorizationContext;
+import org.springframework.security.web.access.AccessDeniedHandlerImpl;
+import org.springframework.security.web.authentication.LoginUrlAuthenticationEntryPoint;
 import org.springframework.security.web.authentication.UsernamePasswordAuthenticationFilter;
 import org.springframework.security.web.servlet.util.matcher.PathPatternRequestMatcher;
+import org.springframework.security.web.util.matcher.RequestMatcher;
 import tools.jackson.databind.json.JsonMapper;
 
 /** Who may come in, by which way, and what the browser is told about this site. */
@@ -30,7 +35,7 @@ class AccessRules {
     @Bean
     SecurityFilterChain accessRulesChain(HttpSecurity http, ObjectProvider<KeyRing> rings, JsonMapper json) throws Exception {
         List<KeyRing> known = rings.orderedStream().toList();
-        PathPatternRequestMatcher.Builder path = PathPatternRequestMatcher.withDefaults();
+        RequestMatcher script = PathPatternRequestMatcher.withDefaults().matcher("/api/v1/**");
         http
                 .addFilterBefore(new KeyFilter(known, json), UsernamePasswordAuthenticationFilter.class)
                 .authorizeHttpRequests(rules -> rules
@@ -52,23 +57,31 @@ class AccessRules {
                 // A key is sent on purpose with each request, so it can't be ridden on from another site.
                 .csrf(csrf -> csrf.ignoringRequestMatchers(KeyFilter::carriesKey))
                 .exceptionHandling(refusals -> refusals
-                        .defaultAuthenticationEntryPointFor((request, response, cause) -> {
-                            response.setStatus(HttpStatus.UNAUTHORIZED.value());
-                            response.setContentType(MediaType.APPLICATION_PROBLEM_JSON_VALUE);
-                            json.writeValue(response.getOutputStream(), Problem.of(HttpStatus.UNAUTHORIZED, "NOT_SIGNED_IN",
-                                    "Sign in at /login, or send a key as Authorization: Bearer."));
-                        }, path.matcher("/api/v1/**"))
-                        .defaultAccessDeniedHandlerFor((request, response, cause) -> {
-                            response.setStatus(HttpStatus.FORBIDDEN.value());
-                            response.setContentType(MediaType.APPLICATION_PROBLEM_JSON_VALUE);
-                            json.writeValue(response.getOutputStream(), Problem.of(HttpStatus.FORBIDDEN, "NOT_ALLOWED",
-                                    "Your roles or the scopes of this key do not allow this call."));
-                        }, path.matcher("/api/v1/**")))
+                        .authenticationEntryPoint((request, response, cause) -> {
+                            if (script.matches(request)) {
+                                refuse(response, json, HttpStatus.UNAUTHORIZED, "NOT_SIGNED_IN", "Sign in at /login, or send a key as Authorization: Bearer.");
+                            } else {
+                                new LoginUrlAuthenticationEntryPoint("/login").commence(request, response, cause);
+                            }
+                        })
+                        .accessDeniedHandler((request, response, cause) -> {
+                            if (script.matches(request)) {
+                                refuse(response, json, HttpStatus.FORBIDDEN, "NOT_ALLOWED", "Your roles or the scopes of this key do not allow this call.");
+                            } else {
+                                new AccessDeniedHandlerImpl().handle(request, response, cause);
+                            }
+                        }))
                 .headers(headers -> headers
                         .contentSecurityPolicy(policy -> policy.policyDirectives(CONTENT_SECURITY_POLICY))
                         .referrerPolicy(policy -> policy.policy(
                                 org.springframework.security.web.header.writers.ReferrerPolicyHeaderWriter.ReferrerPolicy.SAME_ORIGIN)));
         return http.build();
+    }
+
+    private static void refuse(HttpServletResponse response, JsonMapper json, HttpStatus status, String code, String detail) throws IOException {
+        response.setStatus(status.value());
+        response.setContentType(MediaType.APPLICATION_PROBLEM_JSON_VALUE);
+        json.writeValue(response.getOutputStream(), Problem.of(status, code, detail));
     }
 
     private static AuthorizationManager<RequestAuthorizationContext> anyOf(String... authorities) {
