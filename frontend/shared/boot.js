@@ -7,11 +7,12 @@ import { mount as keys } from './elements/keys.js';
 import { mount as rows } from './elements/rows.js';
 import { mount as display } from './elements/display-settings.js';
 import { mount as errorSummary } from './elements/error-summary.js';
+import { mount as pageTools } from './elements/page-tools.js';
 import { mount as liveParts } from './elements/live-part.js';
 
 const PAGE_NAME = /^[a-z][a-z0-9-]*(\/[a-z][a-z0-9-]*)+$/;
 
-for (const mount of [display, clock, keys, rows, errorSummary, liveParts]) mount(document);
+for (const mount of [display, clock, keys, rows, errorSummary, pageTools, liveParts]) mount(document);
 
 const page = document.body.dataset.page;
 if (page && PAGE_NAME.test(page)) {

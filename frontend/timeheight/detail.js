@@ -2,7 +2,7 @@
 import { make, symbol } from '../shared/elements/make.js';
 import { flightLevelText } from '../shared/lib/flight-level.js';
 import { intensityWord } from '../shared/lib/intensity.js';
-import { fixed, isNumber, knotsText, percentText, richardsonText } from '../shared/lib/units.js';
+import { fixed, isNumber, knotsText, MISSING, percentText, richardsonText } from '../shared/lib/units.js';
 import { dayHhmmZ, hhmmZ, spanText } from '../shared/lib/utc.js';
 import { lowestRichardson } from './field.js';
 
@@ -32,14 +32,14 @@ function columnDetail(column, display, deskMinute) {
   return [
     make('h3', {}, `${display.station.name} ${dayHhmmZ(column.nominalMinute * 60000)}`),
     facts([
-      ['released', column.launchedAt ? dayHhmmZ(column.launchedAt) : '-'],
+      ['released', column.launchedAt ? dayHhmmZ(column.launchedAt) : MISSING],
       ['age', isNumber(deskMinute) ? spanText(deskMinute - column.launchedMinute) : null],
       ['version', String(column.version)],
       ['not analysed', column.analysed ? null : column.notAnalysed],
       ['lowest Ri', lowest && `${richardsonText(lowest.richardson)} at ${flightLevelText(lowest.flightLevel)}, ${display.windowM} m window`],
       ['tropopause', flightLevelText(column.tropopauseFlightLevel)],
       ['highest wind', isNumber(column.maxWindKt) ? `${knotsText(column.maxWindKt)} at ${flightLevelText(column.maxWindFlightLevel)}`
-        + (column.maxWindAtTopOfData ? ', top of the data: may be higher' : '') : '-'],
+        + (column.maxWindAtTopOfData ? ', top of the data: may be higher' : '') : MISSING],
       ['carried until', dayHhmmZ(column.carriedUntilMinute * 60000)],
     ]),
     link(column.analysed ? `/soundings/${id(column.soundingId)}` : '/intake', column.analysed ? 'Open sounding' : 'Open Intake'),

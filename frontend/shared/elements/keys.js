@@ -17,12 +17,8 @@ export function mount(root) {
     }
     if (event.altKey || event.ctrlKey || event.metaKey || isTyping(event.target)) return;
     if (root.querySelector('dialog[open]')) return;
-    if (event.key === '?') {
-      const table = root.getElementById('key-table');
-      if (table) { event.preventDefault(); table.showModal(); }
-      return;
-    }
-    if (html.dataset.letters === 'off' || event.key.length !== 1) return;
+    // the table of keys is where letters are switched on again, so its own key always works
+    if ((html.dataset.letters === 'off' && event.key !== '?') || event.key.length !== 1) return;
     const wanted = event.key.toUpperCase();
     const target = [...root.querySelectorAll('[data-key]')]
       .find(it => it.dataset.key.toUpperCase() === wanted && !it.disabled && it.getClientRects().length > 0);

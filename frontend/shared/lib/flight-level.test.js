@@ -7,7 +7,7 @@ test('a flight level always has three figures', () => {
   assert.equal(flightLevelText(7.4), 'FL007');
   assert.equal(flightLevelText(0), 'FL000');
   assert.equal(flightLevelText(-2), 'FL\u221202');
-  assert.equal(flightLevelText(null), '-');
+  assert.equal(flightLevelText(null), '\u2013');
 });
 
 // published: the usual table of pressure levels and their ICAO standard heights in feet, from memory:

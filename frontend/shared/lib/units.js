@@ -1,19 +1,19 @@
 /*
- * Numbers as the desk writes them: decimal point, true minus, a thin space between thousands, "-" for what is
- * missing and never 0.
+ * Numbers as the desk writes them: decimal point, true minus, a thin space between thousands, a dash for what
+ * is missing and never 0.
  */
 export const METRES_PER_FOOT = 0.3048;
 export const MS_PER_KNOT = 0.514444;
 /** 1 kt per 1000 ft in s⁻¹. */
 export const PER_SECOND_PER_KT_PER_1000_FT = MS_PER_KNOT / (1000 * METRES_PER_FOOT);
-export const MISSING = '-';
+export const MISSING = '\u2013';
 
 const MINUS = '\u2212';
 const THIN_SPACE = '\u2009';
 
 export const isNumber = value => typeof value === 'number' && Number.isFinite(value);
 
-/** A fixed number of decimals; `-` where there is no number. */
+/** A fixed number of decimals; a dash where there is no number. */
 export function fixed(value, decimals) {
   if (!isNumber(value)) return MISSING;
   const text = Math.abs(value).toFixed(decimals);
@@ -23,12 +23,12 @@ export function fixed(value, decimals) {
   return sign + spaced + (part ? `.${part}` : '');
 }
 
-/** Richardson number: two decimals below 1, one from 1 to 10, `>10` above; `-` where it is missing. */
+/** Richardson number: two decimals below 1, one from 1 to 10, `>10` above; below 0 the air is overturned. */
 export function richardsonText(value) {
   if (!isNumber(value)) return MISSING;
   if (value > 10) return '>10';
-  if (value < -10) return `<${MINUS}10`;
-  return Math.abs(value) < 0.995 ? fixed(value, 2) : fixed(value, 1);
+  if (value < 0) return 'overturned';
+  return value < 0.995 ? fixed(value, 2) : fixed(value, 1);
 }
 
 /** Shear in kt/1000 ft, one decimal. */

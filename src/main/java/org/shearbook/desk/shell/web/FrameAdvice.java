@@ -4,6 +4,7 @@ import jakarta.servlet.http.Cookie;
 import jakarta.servlet.http.HttpServletRequest;
 import java.time.Clock;
 import java.time.Instant;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -25,6 +26,8 @@ import org.springframework.web.bind.annotation.ModelAttribute;
 /** Gives every page its frame. */
 @ControllerAdvice(annotations = Controller.class)
 class FrameAdvice {
+
+    private static final String AS_KNOWN_AT = "asKnownAt";
 
     private final ShellSettings settings;
     private final Clock clock;
@@ -57,7 +60,20 @@ class FrameAdvice {
         return new FrameView(settings.office(), now, show.utcToSecond(now), person == null ? null : nameOf(person),
                 person == null ? List.of() : statuses.stream().map(line -> new FrameView.StatusCell(line.label(), line.text())).toList(),
                 banners.stream().map(PageBanner::text).toList(), groups, request.getServletPath(),
-                chosen(request, "shearbook-theme", "dark", "light"), chosen(request, "shearbook-brightness", "day", "evening", "night"));
+                chosen(request, "shearbook-theme", "dark", "light"), chosen(request, "shearbook-brightness", "day", "evening", "night"),
+                blankToNull(request.getParameter(AS_KNOWN_AT)), otherParameters(request));
+    }
+
+    private static @Nullable String blankToNull(@Nullable String text) {
+        return text == null || text.isBlank() ? null : text;
+    }
+
+    private static List<Map.Entry<String, String>> otherParameters(HttpServletRequest request) {
+        if (!"GET".equals(request.getMethod())) {
+            return List.of();
+        }
+        return request.getParameterMap().entrySet().stream().filter(it -> !it.getKey().equals(AS_KNOWN_AT))
+                .flatMap(it -> Arrays.stream(it.getValue()).map(value -> Map.entry(it.getKey(), value))).toList();
     }
 
     /** Name and roles, in words. */

@@ -19,9 +19,12 @@ import org.shearbook.desk.shell.MenuEntry;
  * @param path       the address of this page, to mark it in the menu
  * @param theme      {@code dark} or {@code light}
  * @param brightness {@code day}, {@code evening} or {@code night}
+ * @param asKnownAt  the moment the page is drawn for, as it was asked; null for now
+ * @param otherParameters what else the address asks for, kept when the moment changes
  */
 public record FrameView(String office, Instant now, String clock, @Nullable String person, List<StatusCell> statuses, List<String> banners,
-        Map<String, List<MenuEntry>> menu, String path, String theme, String brightness) {
+        Map<String, List<MenuEntry>> menu, String path, String theme, String brightness, @Nullable String asKnownAt,
+        List<Map.Entry<String, String>> otherParameters) {
 
     /** A cell of the top bar. */
     public record StatusCell(String label, String text) {
