@@ -25,7 +25,7 @@ public class Show {
     private static final DateTimeFormatter TIME = DateTimeFormatter.ofPattern("HHmm'Z'", Locale.ROOT).withZone(ZoneOffset.UTC);
     private static final DateTimeFormatter SECOND = DateTimeFormatter.ofPattern("HHmm:ss'Z'", Locale.ROOT).withZone(ZoneOffset.UTC);
     private static final DateTimeFormatter DAY = DateTimeFormatter.ofPattern("d MMM", Locale.ROOT).withZone(ZoneOffset.UTC);
-    private static final DateTimeFormatter LONG_DAY = DateTimeFormatter.ofPattern("d MMMM yyyy", Locale.ROOT).withZone(ZoneOffset.UTC);
+    private static final DateTimeFormatter LONG_DAY = DateTimeFormatter.ofPattern("d MMMM yyyy", Locale.ENGLISH).withZone(ZoneOffset.UTC);
 
     private final Clock clock;
 

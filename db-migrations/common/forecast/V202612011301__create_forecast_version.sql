@@ -1,0 +1,43 @@
+-- What was issued, version by version; nothing here is ever changed. Validity is the observed time of a forecast.
+create sequence forecast_seq start with 1 increment by 1;
+create table forecast_version (
+    row_id                bigint                      not null primary key,
+    forecast_id           bigint                      not null,
+    slf_number            integer                     not null,
+    version               integer                     not null,
+    state                 varchar(20)                 not null,
+    product_text          text                        not null,
+    author                varchar(100)                not null,
+    reason                text,
+    issued_at             timestamp(6) with time zone not null,
+    intensity             varchar(20)                 not null,
+    conditions            varchar(20)                 not null,
+    reported_at           timestamp(6) with time zone,
+    place_name            text                        not null,
+    centre_name           text,
+    centre_latitude_deg   double precision,
+    centre_longitude_deg  double precision,
+    radius_nm             integer,
+    corner_latitudes_deg  double precision array,
+    corner_longitudes_deg double precision array,
+    base_flight_level     integer                     not null,
+    top_flight_level      integer                     not null,
+    valid_from            timestamp(6) with time zone not null,
+    valid_until           timestamp(6) with time zone not null,
+    probability_percent   integer                     not null,
+    moving_toward         varchar(4)                  not null,
+    moving_kt             integer                     not null,
+    strength_change       varchar(10)                 not null,
+    would_change          text                        not null,
+    second_look_by        varchar(100),
+    alone_reason          text,
+    observed_at           timestamp(6) with time zone not null,
+    received_at           timestamp(6) with time zone not null,
+    recorded_at           timestamp(6) with time zone not null,
+    constraint forecast_version_once unique (forecast_id, version),
+    constraint forecast_number_once unique (slf_number, version),
+    constraint forecast_level_order check (base_flight_level < top_flight_level),
+    constraint forecast_time_order check (valid_from < valid_until)
+);
+create index forecast_version_validity on forecast_version (valid_until, valid_from);
+grant select, insert on forecast_version to shearbook_desk;
