@@ -5,7 +5,10 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import org.jspecify.annotations.Nullable;
+import org.shearbook.met.profile.HeightBand;
 import org.shearbook.met.profile.RoundedCornerFunction;
+import org.shearbook.met.richardson.RichardsonProfile;
+import org.shearbook.met.richardson.RoundedFlow;
 
 /**
  * The stability of a stratified shear flow by the Taylor–Goldstein equation: for a layer of a measured profile, or for
@@ -59,35 +62,63 @@ public final class StabilityAnalysis {
     }
 
     /**
-     * The growing waves of one layer of a measured profile.
+     * The growing waves of one layer of an ascent.
+     *
+     * <p>The layer's uninterrupted stretch of the ascent is used, with its buoyancy sorted. The lowest level is taken as
+     * the ground when it lies within a corner width of the launch site's height.
+     *
+     * @param profile the ascent analysed for one window
+     * @param layer   base and top of the layer [m]
+     * @return the waves found, or why there is none
+     * @throws IllegalArgumentException if wind and temperature do not both reach the middle of the layer
+     * @see #ofLayer(RoundedFlow, HeightBand, Boundary)
+     */
+    public StabilityResult ofLayer(RichardsonProfile profile, HeightBand layer) {
+        RoundedFlow flow = flowOf(profile, layer);
+        double ground = profile.profile().surfaceHeight();
+        double corner = flow.eastward().narrowestCorner(flow.extent().base(), layer.top());
+        Boundary lowest = flow.extent().base() <= ground + corner ? Boundary.RIGID : Boundary.RADIATING;
+        return ofLayer(flow, layer, lowest);
+    }
+
+    static RoundedFlow flowOf(RichardsonProfile profile, HeightBand layer) {
+        RoundedFlow flow = profile.flowAt(0.5 * (layer.base() + layer.top()));
+        if (flow == null) {
+            throw new IllegalArgumentException("wind and temperature do not both reach the middle of the layer from "
+                    + layer.base() + " to " + layer.top() + " m");
+        }
+        return flow;
+    }
+
+    /**
+     * The growing waves of one layer of a smooth flow.
      *
      * <p><b>Method.</b> The layer is taken with a margin of its own depth, at least four corner widths, on either side.
-     * Beyond that window wind and stability go on uniformly; where the window reaches the lowest knot the closure given
-     * for it holds. The grid has at least four steps per corner width and 24 per layer depth. Azimuths lie within 90° of
-     * the shear across the layer; wavelengths from 1.5 to 15 layer depths. Fourth order in the spacing.
+     * Beyond that window wind and stability go on uniformly; where the window reaches the lowest height of the flow
+     * the closure given for it holds. The grid has at least four steps per corner width and 24 per layer depth. Azimuths
+     * lie within 90° of the shear across the layer; wavelengths from 1.5 to 15 layer depths. Fourth order in the spacing.
      *
      * <p><b>Limits.</b> A neighbouring layer closer than about one depth must be part of the same layer, otherwise
-     * their common wave is missed. A layer thinner than two corner widths counts as two corner widths deep.
+     * their common wave is missed. A layer thinner than two corner widths counts as two corner widths deep. Where N² is
+     * negative nothing is given.
      *
-     * @param eastward  u(z) [m s⁻¹]
-     * @param northward v(z) [m s⁻¹]
-     * @param buoyancy  B(z) with {@code N² = dB/dz} [m s⁻²], sorted so that it does not decrease with height
-     * @param base      base of the layer [m]
-     * @param top       top of the layer [m]
-     * @param lowest    what closes the profile at its lowest knot: {@code RIGID} if that is the ground
+     * @param rounded wind [m s⁻¹] and sorted buoyancy [m s⁻²] as functions of height
+     * @param layer   base and top of the layer [m]
+     * @param lowest  what closes the flow at its lowest height: {@code RIGID} if that is the ground
      * @return the waves found, or why there is none
-     * @throws IllegalArgumentException if top is not above base or the layer lies outside the profile
+     * @throws IllegalArgumentException if the layer lies outside the flow
      */
-    public StabilityResult ofLayer(RoundedCornerFunction eastward, RoundedCornerFunction northward,
-            RoundedCornerFunction buoyancy, double base, double top, Boundary lowest) {
-        double lowestKnot = buoyancy.lowestKnot();
-        double highestKnot = buoyancy.highestKnot();
-        if (!(top > base)) {
-            throw new IllegalArgumentException("top must be above base: base " + base + ", top " + top);
-        }
+    public StabilityResult ofLayer(RoundedFlow rounded, HeightBand layer, Boundary lowest) {
+        RoundedCornerFunction eastward = rounded.eastward();
+        RoundedCornerFunction northward = rounded.northward();
+        RoundedCornerFunction buoyancy = rounded.sortedBuoyancy();
+        double base = layer.base();
+        double top = layer.top();
+        double lowestKnot = rounded.extent().base();
+        double highestKnot = rounded.extent().top();
         if (!(base < highestKnot) || !(top > lowestKnot)) {
             throw new IllegalArgumentException("the layer from " + base + " to " + top
-                    + " m lies outside the profile from " + lowestKnot + " to " + highestKnot + " m");
+                    + " m lies outside the flow from " + lowestKnot + " to " + highestKnot + " m");
         }
         double corner = Math.min(buoyancy.narrowestCorner(base, top),
                 Math.min(eastward.narrowestCorner(base, top), northward.narrowestCorner(base, top)));
@@ -116,7 +147,12 @@ public final class StabilityAnalysis {
         int rangeTo = (int) Math.min(intervals, Math.ceil((top + corner - from) / sampled.spacing));
         ModeSearch search = new ModeSearch(flow, sampled, finest, angles, wavenumbers, searched, rangeFrom, rangeTo,
                 growthFloor(sampled), settings.workLimit(), true, true);
-        return result(flow, sampled, theorem, search, remarks, false);
+        boolean convective = theorem.minRichardson() < 0;
+        if (convective) {
+            remarks.add("statically unstable: N² is negative inside the layer or beside it; what grows there is"
+                    + " convection, which this analysis does not cover");
+        }
+        return result(flow, sampled, theorem, search, remarks, convective);
     }
 
     /**
