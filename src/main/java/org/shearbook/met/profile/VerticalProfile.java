@@ -32,6 +32,7 @@ public final class VerticalProfile {
 
     private final double[] temperatureHeight;
     private final double[] windHeight;
+    private final double[] positionHeight;
     private final double[] pressureHeight;
     private final double[] logPressure;
 
@@ -65,7 +66,7 @@ public final class VerticalProfile {
         }
         temperatureHeight = heights("thermodynamic level", this.thermodynamicLevels, ThermodynamicLevel::height);
         windHeight = heights("wind level", this.windLevels, WindLevel::height);
-        heights("position", this.positions, BalloonPosition::height);
+        positionHeight = heights("position", this.positions, BalloonPosition::height);
         requireAscendingBands("temperature gap", this.temperatureGaps);
         requireAscendingBands("wind gap", this.windGaps);
         double[][] pressureKnots = pressureKnots();
@@ -295,17 +296,16 @@ public final class VerticalProfile {
 
     /** Where the balloon was at a height, linear between known positions; null beyond them. */
     public @Nullable BalloonPosition positionAt(double height) {
-        double[] heights = positions.stream().mapToDouble(BalloonPosition::height).toArray();
-        int k = segment(heights, height);
+        int k = segment(positionHeight, height);
         if (k < 0) {
             return null;
         }
         BalloonPosition below = positions.get(k);
-        if (heights[k] == height) {
+        if (positionHeight[k] == height) {
             return below;
         }
         BalloonPosition above = positions.get(k + 1);
-        double weight = (height - heights[k]) / (heights[k + 1] - heights[k]);
+        double weight = (height - positionHeight[k]) / (positionHeight[k + 1] - positionHeight[k]);
         // the shorter way round, for a balloon that crosses the date line
         double eastward = Math.IEEEremainder(above.longitude() - below.longitude(), 360);
         return new BalloonPosition(height,

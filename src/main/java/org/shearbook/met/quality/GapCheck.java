@@ -9,15 +9,19 @@ import org.shearbook.met.profile.HeightBand;
  * Stretches in which nothing may be interpolated. A gap lies between two neighbouring levels with a value
  * <ul>
  * <li>when the message bounds it (FM 35 part B or D, {@code nn///}), or
- * <li>when they are farther apart than ten times the usual spacing of this ascent, but never below 200 m nor above
- *     5000 m (own limits: a drop-out of 600 m in a 10 m ascent is a gap, 4 km between coded levels is not).
+ * <li>in a dense ascent (usual spacing up to 100 m) when they are farther apart than ten times the usual spacing and
+ *     than 200 m: a drop-out of 600 m in a 10 m ascent is a gap, or
+ * <li>in a coded ascent when they are farther apart than 5000 m: significant levels are left out by design where the
+ *     profile is straight, and 3 km without one is common in the lower stratosphere.
  * </ul>
+ * The limits are own choices; the usual spacing is the median.
  */
 final class GapCheck implements QualityCheck {
 
+    private static final double DENSE = 100;
     private static final double USUAL_SPACINGS = 10;
-    private static final double NEVER_BELOW = 200;
-    private static final double ALWAYS_ABOVE = 5000;
+    private static final double LEAST_IN_DENSE = 200;
+    private static final double IN_CODED = 5000;
 
     @Override
     public void apply(LevelsUnderCheck sounding) {
@@ -57,6 +61,7 @@ final class GapCheck implements QualityCheck {
             sorted[k] = levels.get(k + 1).height - levels.get(k).height;
         }
         Arrays.sort(sorted);
-        return Math.min(ALWAYS_ABOVE, Math.max(NEVER_BELOW, USUAL_SPACINGS * sorted[sorted.length / 2]));
+        double usual = sorted[sorted.length / 2];
+        return usual > DENSE ? IN_CODED : Math.max(LEAST_IN_DENSE, USUAL_SPACINGS * usual);
     }
 }

@@ -1,5 +1,6 @@
 /**
- * N², shear, gradient and bulk Richardson number, and the layers where it is small. May use {@code profile}.
+ * N², shear, gradient and bulk Richardson number, and the layers where it is small. Start with
+ * {@link RichardsonAnalysis}. May use {@code profile}.
  */
 @NullMarked
 package org.shearbook.met.richardson;
