@@ -141,6 +141,20 @@ final class FixChoice {
         return identifier.length() == 3 ? find("C" + identifier) : List.of();
     }
 
+    /**
+     * Variation around the leading station, for radials of a fix whose own is not known: it changes by less than
+     * the rounding of a radial over such a distance.
+     *
+     * @return [degrees, east positive]; {@code NaN} when unknown
+     */
+    double variationNear(Fix fix) {
+        Fix station = leadingStation();
+        if (station == null || distance(station, fix) > FARTHEST) {
+            return Double.NaN;
+        }
+        return variation(station, candidates(leading, true));
+    }
+
     private static double nearestDistance(Fix place, List<Fix> references) {
         double least = Double.POSITIVE_INFINITY;
         for (Fix reference : references) {

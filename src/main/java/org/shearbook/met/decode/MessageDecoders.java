@@ -14,6 +14,7 @@ public final class MessageDecoders {
                 new IgraDecoder(),
                 new TempDecoder(),
                 new CsvSoundingDecoder(),
+                new CsvAirReportDecoder(),
                 new PilotReportDecoder()));
     }
 

@@ -301,6 +301,12 @@ final class PlaceGroup {
             return unresolved(List.of(fix));
         }
         variation = FixChoice.variation(fix, candidates);
+        if (Double.isNaN(variation)) {
+            variation = choice.variationNear(fix);
+            if (!Double.isNaN(variation) && miles > 0.0) {
+                remark.accept("VARIATION_OF_STATION", "The variation at " + fix.identifier() + " is not known; that of the leading station was used.");
+            }
+        }
         boolean known = !Double.isNaN(variation);
         if (!known && miles > 0.0) {
             remark.accept("VARIATION_UNKNOWN", "The radial is magnetic and the variation at " + fix.identifier()
