@@ -155,6 +155,16 @@ public final class PilotReportDecoder implements MessageDecoder {
             while (last > first && capitals.charAt(last - 1) == ' ') {
                 last--;
             }
+            int begin = from;
+            while (begin < first && isBlank(text.text().charAt(begin))) {
+                begin++;
+            }
+            if (first == last && begin < first) {
+                close();
+                open(begin, to, false);
+                close();
+                return;
+            }
             if (first == last) {
                 if (endsWithEquals && openFrom >= 0) {
                     openTo = to;
@@ -162,7 +172,7 @@ public final class PilotReportDecoder implements MessageDecoder {
                 }
                 return;
             }
-            boolean indented = first > from && beginsLine;
+            boolean indented = begin > from && begin == first && beginsLine;
             if (last - first <= LONGEST_REPORT && isEnvelope(first, last)) {
                 return;
             }
@@ -176,7 +186,7 @@ public final class PilotReportDecoder implements MessageDecoder {
                 reopen(to);
             } else {
                 close();
-                open(first, to, false);
+                open(begin, to, false);
             }
             if (openIsReport && !openHasPlace) {
                 openHasPlace = contains("/OV", first, last);
@@ -184,6 +194,11 @@ public final class PilotReportDecoder implements MessageDecoder {
             if (endsWithEquals || !openIsReport) {
                 close();
             }
+        }
+
+        /** White space, and the control characters that frame a bulletin on the line. */
+        private static boolean isBlank(char c) {
+            return c == ' ' || c == '\t' || c == '\r' || c == '\n' || c >= 1 && c <= 4;
         }
 
         private boolean isEnvelope(int first, int last) {
@@ -316,7 +331,7 @@ public final class PilotReportDecoder implements MessageDecoder {
             int to = openTo;
             openFrom = -1;
             closedTo = -1;
-            while (to > from && text.text().charAt(to - 1) <= ' ') {
+            while (to > from && isBlank(text.text().charAt(to - 1))) {
                 to--;
             }
             if (!openIsReport) {

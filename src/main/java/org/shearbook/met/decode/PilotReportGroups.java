@@ -100,7 +100,8 @@ final class PilotReportGroups {
             texts.put(open, new StringBuilder(capitals.substring(from, to)));
             starts.put(open, from);
         } else {
-            text.append(" / ").append(capitals, from, to);
+            // a full stop: what follows is said anew and is no range with what went before
+            text.append(" . ").append(capitals, from, to);
         }
         if (!capitals.substring(from, to).isBlank()) {
             filled.add(open);
