@@ -10,6 +10,7 @@ import { bandField } from '../shared/charts/band-field.js';
 import { columnNotes } from '../shared/charts/column-notes.js';
 import { crossHair } from '../shared/charts/cross-hair.js';
 import { forecastBoxes } from '../shared/charts/forecast-boxes.js';
+import { evidenceStrip, STRIP_HEIGHT } from '../shared/charts/evidence-strip.js';
 import { flightLevelAxis, kilometreAxis } from '../shared/charts/level-axis.js';
 import { levelLines } from '../shared/charts/level-lines.js';
 import { printPalette, screenPalette } from '../shared/charts/palette.js';
@@ -76,6 +77,10 @@ class TimeHeight {
     this.segments = richardsonSegments(this.columns);
     this.notes = columnNotesOf(this.columns, WHOLE_HEIGHT.high);
     this.references = referencesOf(this.columns);
+    this.evidence = {
+      soundings: this.columns.map(column => column.launchedMinute),
+      reports: this.reports.map(report => report.minute),
+    };
     this.cursor = null;
     this.choice = null;
     this.report = null;
@@ -156,6 +161,7 @@ class TimeHeight {
       referenceLines(() => this.references, palette),
       levelLines(() => this.segments, palette),
       forecastBoxes(() => this.boxes.filter(box => !box.superseded && !box.cancelled), palette, () => true),
+      evidenceStrip(() => this.evidence, palette),
       reportMarks(chart => this.clusters(chart), palette),
       crossHair(cursor, palette),
     ];
@@ -204,7 +210,7 @@ class TimeHeight {
       normalized: true,
       responsive: true,
       maintainAspectRatio: false,
-      layout: { padding: { top: 8 } },
+      layout: { padding: { top: STRIP_HEIGHT } },
       plugins: { legend: { display: false }, tooltip: { enabled: false } },
       scales: {
         x: utcAxis(this.view, this.palette, font),

@@ -26,7 +26,8 @@ export function legend(display) {
       make('li', {}, make('span', { className: 'legend-line is-chain' }), 'tropopause'),
       make('li', {}, make('span', { className: 'legend-box' }), 'moderate box'),
       make('li', {}, make('span', { className: 'legend-box is-double' }), 'severe box'),
+      make('li', {}, make('span', { className: 'legend-box is-broken' }), 'occasionally severe'),
       make('li', {}, make('span', { className: 'legend-box is-dotted' }), 'superseded')),
     make('h3', {}, 'Air-reports'), marks,
-    make('p', { className: 'legend-note' }, 'base line: automated; dot below: in cloud; slash: not scored'));
+    make('p', { className: 'legend-note' }, 'base line: automated; dot below: in cloud; slash: not scored; above the field: a block for each release, a tick for each report'));
 }

@@ -1,10 +1,11 @@
 /*
- * Chart.js plugin: forecasts as boxes in time and level. Moderate is a single outline, severe a double one; a
- * superseded version is a thin dotted ghost, a cancelled one is struck by a diagonal. `source()` gives
+ * Chart.js plugin: forecasts as boxes in time and level. Moderate is a single outline, severe a double one whose
+ * second line is broken where severe is expected occasionally; a superseded version is a thin dotted ghost, a cancelled one is struck by a diagonal. `source()` gives
  * `{from, until, base, top, label, intensity, probability, superseded, cancelled, chosen}`; `faint()` draws outlines
  * only, for the pane whose subject is something else.
  */
 import { inside, labelFont, textFont, textWithHalo } from './draw.js';
+import { isOccasionallySevere, mainGrade } from '../lib/intensity.js';
 import { labelRoom } from './label-room.js';
 import { traceSymbol } from './report-symbols.js';
 
@@ -54,6 +55,7 @@ function outline(ctx, box, at, colours, faint) {
   } else {
     stroke(0, 1.5, [], 3.5);
     if (severe(box)) stroke(3.5, 1.5, [], 0);
+    else if (isOccasionallySevere(box.intensity)) stroke(3.5, 1.25, [6, 5], 0);
     if (box.chosen) stroke(7, 1, [4, 2], 0);
   }
   ctx.setLineDash([]);
@@ -108,7 +110,7 @@ function words(ctx, box, at, colours, room, area) {
   ctx.strokeStyle = ink(box, colours, false);
   ctx.lineWidth = 1.75;
   ctx.lineJoin = 'round';
-  traceSymbol(ctx, box.intensity, 0.75);
+  traceSymbol(ctx, mainGrade(box.intensity), 0.75);
   ctx.restore();
   ctx.font = labelFont(colours);
   const end = fits ? at.right - pad : left + needed;

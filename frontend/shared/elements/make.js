@@ -1,3 +1,5 @@
+import { mainGrade } from '../lib/intensity.js';
+
 /** Builds an element: make('p', { className: 'empty', dataset: {…} }, 'text', child, …). Text is never read as HTML. */
 export function make(name, properties = {}, ...children) {
   const element = document.createElement(name);
@@ -20,7 +22,7 @@ export function symbol(intensity) {
   svg.setAttribute('class', 'mark');
   svg.setAttribute('aria-hidden', 'true');
   const use = document.createElementNS(SVG, 'use');
-  use.setAttribute('href', new URL(`../symbols.svg#${SYMBOL[intensity] ?? 'nil'}`, import.meta.url).href);
+  use.setAttribute('href', new URL(`../symbols.svg#${SYMBOL[mainGrade(intensity)] ?? 'nil'}`, import.meta.url).href);
   svg.append(use);
   return svg;
 }
