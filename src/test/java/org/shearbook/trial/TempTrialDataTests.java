@@ -15,6 +15,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.stream.Stream;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.condition.EnabledIfSystemProperty;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
@@ -68,6 +69,20 @@ class TempTrialDataTests {
         Map<String, List<Expected>> expected = expected(file);
         assertThat(decoded.keySet()).containsExactlyInAnyOrderElementsOf(expected.keySet());
         expected.forEach((key, rows) -> compare(key, decoded.get(key), rows));
+    }
+
+    @Test
+    void everyPilotReportIsReadWhole() throws IOException {
+        Path file = Path.of(System.getProperty("trial.data"), "pilot-tac", "UPCI30_BABJ_121800_20191112.txt");
+        Decoding decoding = MessageDecoders.all().decode(Files.readAllBytes(file), new DecodingContext(RECEIVED_AT, FixLookup.NONE));
+        assertThat(decoding.rejected()).isEmpty();
+        assertThat(decoding.messages()).hasSize(Files.readString(file).split("PPAA").length - 1).allSatisfy(m -> {
+            DecodedSounding sounding = (DecodedSounding) m;
+            assertThat(sounding.remarks()).extracting(Remark::code).doesNotContain("GROUP_SHIFTED", "REPORT_CUT_OFF");
+            if (!sounding.raw().contains("NIL")) {
+                assertThat(sounding.levels()).as("850 to 100 hPa, and the maximum wind unless it is 77999").hasSize(sounding.raw().contains("77999") ? 9 : 10);
+            }
+        });
     }
 
     private static void compare(String key, DecodedSounding sounding, List<Expected> rows) {

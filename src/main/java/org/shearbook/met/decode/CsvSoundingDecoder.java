@@ -23,6 +23,7 @@ import org.shearbook.met.decode.SoundingColumn.Quantity;
 public final class CsvSoundingDecoder implements MessageDecoder {
 
     private static final int HEADER_SOUGHT_WITHIN = 200;
+    private static final int LOOKED_AT = 16_384;
 
     private static final Set<String> AIR_REPORT_WORDS = Set.of("report_id", "report_kind", "report_class", "observed_at", "flight_level", "aircraft_type",
             "aircraft", "flight_id", "edr_peak", "edr_mean", "turbulence_intensity");
@@ -37,7 +38,7 @@ public final class CsvSoundingDecoder implements MessageDecoder {
         if (MessageText.isBinary(bytes)) {
             return false;
         }
-        int looked = Math.min(bytes.length, 65_536);
+        int looked = Math.min(bytes.length, LOOKED_AT);
         MessageText text = MessageText.ofUnicode(looked == bytes.length ? bytes : Arrays.copyOf(bytes, looked));
         int header = headerIndex(text);
         return header >= 0 && isSoundingHeader(text.text(text.lines().get(header)));

@@ -51,7 +51,9 @@ final class MessageText {
         } catch (CharacterCodingException notUnicode) {
             text = new String(bytes, StandardCharsets.ISO_8859_1);
         }
-        return new MessageText(text.startsWith("\uFEFF") ? text.substring(1) : text);
+        // In Latin-1 the three bytes of the mark are three characters.
+        String mark = text.startsWith("\uFEFF") ? "\uFEFF" : text.startsWith("\u00EF\u00BB\u00BF") ? "\u00EF\u00BB\u00BF" : "";
+        return new MessageText(text.substring(mark.length()));
     }
 
     /**

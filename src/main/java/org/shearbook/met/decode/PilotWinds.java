@@ -9,11 +9,12 @@ import org.shearbook.met.profile.Units;
  * Parts of FM 32 PILOT. B and D: winds at heights, three to a leading group {@code 9tuuu} in units of 300 m
  * ({@code 8tuuu}: 500 m). Stations of the United States count in thousands of feet instead; the report does not say
  * so, hence the block of the station decides and a remark tells. A and C: winds at standard levels, {@code 55nPP} or
- * {@code 44nPP} with the first of them, and the maximum wind. What follows {@code 21212} repeats such winds under
- * national rules and is left alone.
+ * {@code 44nPP} with the first of them, and the maximum wind. Behind {@code 21212} in part B some services add winds at
+ * heights in tens of metres, {@code nhhhh} with a running figure.
  */
 final class PilotWinds {
 
+    private static final String TENS_OF_METRES = "21212";
     private static final double UNIT = 300;
     private static final double LARGE_UNIT = 500;
     private static final int[] STANDARD = {1000, 925, 850, 700, 500, 400, 300, 250, 200, 150, 100, 70, 50, 30, 20, 10};
@@ -37,9 +38,13 @@ final class PilotWinds {
     }
 
     void readHeights() {
-        while (cursor.hasMore() && !ends()) {
+        while (cursor.hasMore() && !cursor.endsLevels(cursor.at())) {
             int at = cursor.at();
             String group = cursor.group(at).text();
+            if (group.equals(TENS_OF_METRES)) {
+                readTensOfMetres();
+                continue;
+            }
             boolean leads = cursor.group(at).isValue() && (group.charAt(0) == '9' || group.charAt(0) == '8') && TempCode.isDigit(group.charAt(1));
             if (!leads) {
                 cursor.remarkShift(at, "no heights stand here; the group was dropped.");
@@ -78,8 +83,25 @@ final class PilotWinds {
         cursor.moveTo(index);
     }
 
+    private void readTensOfMetres() {
+        int at = cursor.at() + 1;
+        while (!cursor.endsLevels(at) && at + 1 < cursor.size() && cursor.group(at).isValue() && TempCode.areDigits(cursor.group(at).text(), 0, 5)
+                && TempCode.isPlausibleWind(cursor.group(at + 1), cursor.speedUnit())) {
+            double height = 10.0 * Integer.parseInt(cursor.group(at).text().substring(1));
+            cursor.addLevel(Double.NaN, height, Double.NaN, Double.NaN, cursor.wind(at + 1), EnumSet.of(Significance.SIGNIFICANT_WIND));
+            at += 2;
+        }
+        if (!cursor.endsLevels(at)) {
+            cursor.remarkShift(at, "the winds from here on were dropped.");
+            while (!cursor.endsLevels(at)) {
+                at++;
+            }
+        }
+        cursor.moveTo(at);
+    }
+
     void readPressures() {
-        while (cursor.hasMore() && !ends()) {
+        while (cursor.hasMore() && !cursor.endsLevels(cursor.at())) {
             int at = cursor.at();
             TempGroup group = cursor.group(at);
             String text = group.text();
@@ -128,10 +150,6 @@ final class PilotWinds {
         if (shear.isValue() && shear.text().charAt(0) == '4' && !TempCursor.isLaterSection(shear.text()) && indexOf(shear.text().substring(3)) < 0) {
             cursor.moveTo(at + 3);
         }
-    }
-
-    private boolean ends() {
-        return cursor.endsLevels(cursor.at()) || cursor.group(cursor.at()).text().equals("21212");
     }
 
     private static int indexOf(String figures) {

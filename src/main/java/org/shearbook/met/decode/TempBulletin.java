@@ -43,6 +43,9 @@ final class TempBulletin {
 
     /** Whether a text of groups is what these bytes hold: somewhere a part stands before a group with day and hour. */
     static boolean isLikely(MessageText text) {
+        if (!namesAPart(text.text())) {
+            return false;
+        }
         List<TempGroup> groups = groups(text);
         for (int i = 0; i + 1 < groups.size(); i++) {
             if (isPart(groups.get(i).text())) {
@@ -51,6 +54,17 @@ final class TempBulletin {
                         return true;
                     }
                 }
+            }
+        }
+        return false;
+    }
+
+    /** A quick look: most texts that are no report are known by this alone. */
+    private static boolean namesAPart(String text) {
+        for (int i = 3; i < text.length(); i++) {
+            char c = text.charAt(i);
+            if (c >= 'A' && c <= 'D' && text.charAt(i - 1) == c && isPart(text.substring(i - 3, i + 1))) {
+                return true;
             }
         }
         return false;

@@ -152,6 +152,13 @@ class CsvSoundingDecoderTests {
     }
 
     @Test
+    void textThatIsNotUnicodeIsReadAsLatin() {
+        byte[] bytes = ("# station_name=Kelbrith h\u00E4gen\n" + HEADER + ROWS).getBytes(StandardCharsets.ISO_8859_1);
+        assertThat(decoder.recognises(bytes)).isTrue();
+        assertThat(decoder.decode(bytes, context).messages()).hasSize(1);
+    }
+
+    @Test
     void metadataMayTrailTheSeparatorsOfATableProgram() {
         assertThat(read("# station_id=XVKE,,,,\n" + HEADER + ROWS).stationId()).isEqualTo("XVKE");
     }

@@ -216,6 +216,13 @@ class TempDecoderTests {
     }
 
     @Test
+    void someServicesAddWindsInTensOfMetres() {
+        List<ReportedLevel> levels = only("PPBB 06120 00102 90012 33004 34505 35006 21212 10063 27010 20145 28012=").levels();
+        assertThat(levels).extracting(ReportedLevel::height).containsExactly(Double.NaN, 300.0, 600.0, 630.0, 1450.0);
+        assertThat(levels.get(4).windSpeed()).isEqualTo(12);
+    }
+
+    @Test
     void pilotPartAGivesWindsAtConsecutiveStandardLevels() {
         DecodedSounding sounding = only("PPAA 06123 00102 55385 25007 26007 26528 55340 26033 25036 25549 71281 26068=");
         assertThat(sounding.levels()).extracting(l -> l.pressure() / 100).containsExactly(850.0, 700.0, 500.0, 400.0, 300.0, 250.0, Double.NaN);
