@@ -26,6 +26,7 @@ import org.apache.commons.csv.CSVRecord;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.condition.EnabledIfSystemProperty;
+import org.shearbook.met.decode.CsvAirReportDecoder;
 import org.shearbook.met.decode.DecodedAirReport;
 import org.shearbook.met.decode.DecodedAirReport.TurbulenceLayer;
 import org.shearbook.met.decode.DecodedMessage;
@@ -244,5 +245,14 @@ class PilotReportTrialDataTests {
             // one report of PRCUS.txt has lost everything behind its place
             assertThat(decoding.rejected()).as(file.getKey()).hasSize(file.getKey().equals("PRCUS.txt") ? 1 : 0);
         }
+    }
+
+    @Test
+    void theExampleTableOfAirReportsIsReadWhole() throws IOException {
+        byte[] bytes = Files.readAllBytes(FOLDER.resolve("csv/aircraft_design_example.csv"));
+        Decoding decoding = new CsvAirReportDecoder().decode(bytes, context(LONG_AFTER));
+        assertThat(decoding.rejected()).isEmpty();
+        assertThat(decoding.messages()).extracting(message -> ((DecodedAirReport) message).edrPeak()).containsExactly(Double.NaN, 0.36, Double.NaN);
+        assertThat(decoding.messages()).extracting(message -> ((DecodedAirReport) message).turbulence().size()).containsExactly(1, 0, 1);
     }
 }

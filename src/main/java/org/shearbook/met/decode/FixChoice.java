@@ -53,16 +53,29 @@ final class FixChoice {
             if (!aerodrome.isEmpty()) {
                 return aerodrome;
             }
-            return candidates(identifier, false).stream().filter(FixChoice::liesWhereUsReportsComeFrom).toList();
+            return american(candidates(identifier, false));
         }
         return candidates(identifier, false);
     }
 
-    /** North America, Hawaii, the Caribbean, the Marianas. */
-    private static boolean liesWhereUsReportsComeFrom(Fix fix) {
-        boolean america = fix.latitude() > 10.0 && fix.latitude() < 75.0 && fix.longitude() > -180.0 && fix.longitude() < -50.0;
-        boolean marianas = fix.latitude() > 10.0 && fix.latitude() < 21.0 && fix.longitude() > 140.0 && fix.longitude() < 150.0;
-        return america || marianas;
+    /** Those in the United States; among several the aids with a radial, which is what reports are made from. */
+    private static List<Fix> american(List<Fix> places) {
+        List<Fix> american = places.stream().filter(FixChoice::liesInUnitedStates).toList();
+        if (american.isEmpty() || liesTogether(american)) {
+            return american;
+        }
+        List<Fix> withRadial = american.stream().filter(fix -> rankAsAid(fix) == 0).toList();
+        return withRadial.isEmpty() ? american : withRadial;
+    }
+
+    /** By boxes: the conterminous states, Alaska, Hawaii, Puerto Rico, the Marianas. */
+    private static boolean liesInUnitedStates(Fix fix) {
+        return liesIn(fix, 24.0, 49.5, -125.5, -66.0) || liesIn(fix, 51.0, 72.0, -180.0, -129.0) || liesIn(fix, 18.0, 23.0, -161.0, -154.0)
+                || liesIn(fix, 17.0, 19.0, -68.0, -64.0) || liesIn(fix, 13.0, 21.0, 144.0, 147.0);
+    }
+
+    private static boolean liesIn(Fix fix, double south, double north, double west, double east) {
+        return fix.latitude() >= south && fix.latitude() <= north && fix.longitude() >= west && fix.longitude() <= east;
     }
 
     private List<Fix> find(String identifier) {
@@ -89,9 +102,10 @@ final class FixChoice {
                 }
             }
         }
-        if (found.isEmpty() && identifier.length() == 3) {
+        if (identifier.length() == 3) {
+            // PIT is Pittsburgh to an American crew though the only aid of that name stands in Taiwan
             found.addAll(find("K" + identifier));
-            if (identifier.charAt(0) == 'Y' || identifier.charAt(0) == 'Z') {
+            if (found.isEmpty() && (identifier.charAt(0) == 'Y' || identifier.charAt(0) == 'Z')) {
                 found.addAll(find("C" + identifier));
             }
         }
@@ -123,7 +137,7 @@ final class FixChoice {
         List<Fix> references = references(identifier);
         if (references.isEmpty()) {
             // an unknown aerodrome of three letters still tells the country of the bulletin
-            List<Fix> american = places.stream().filter(FixChoice::liesWhereUsReportsComeFrom).toList();
+            List<Fix> american = american(places);
             return leading.length() == 3 && liesTogether(american) ? american : List.of();
         }
         if (!liesTogether(references) && identifier.equals(leading)) {

@@ -81,7 +81,7 @@ class PilotReportPlaceTests {
         Place place = place("LMA", "LMA");
         assertThat(place.latitude()).isCloseTo(40.1, within(1e-9));
         assertThat(place.resolvedBy()).isEqualTo("fix");
-        assertThat(place.candidates()).hasSize(3);
+        assertThat(place.candidates()).hasSize(4);
         assertThat(place("LMA", "KLMA").latitude()).isCloseTo(40.0, within(1e-9));
         assertThat(place("LMA", "WAYPT").latitude()).isCloseTo(39.0, within(1e-9));
     }
