@@ -45,8 +45,7 @@ final class PilotWinds {
                 readTensOfMetres();
                 continue;
             }
-            boolean leads = cursor.group(at).isValue() && (group.charAt(0) == '9' || group.charAt(0) == '8') && TempCode.isDigit(group.charAt(1));
-            if (!leads) {
+            if (!leads(cursor.group(at))) {
                 cursor.remarkShift(at, "no heights stand here; the group was dropped.");
                 cursor.moveTo(at + 1);
                 continue;
@@ -55,32 +54,42 @@ final class PilotWinds {
         }
     }
 
+    /** Reads the winds behind one leading group; when one is lost or too many, nobody can say which, and none is read. */
     private void readThree(String heights) {
-        int index = cursor.at() + 1;
-        double step = heights.charAt(0) == '8' ? LARGE_UNIT : unit;
+        int first = cursor.at() + 1;
+        int winds = 0;
         for (int i = 2; i < 5; i++) {
-            if (!TempCode.isDigit(heights.charAt(i))) {
-                continue;
-            }
-            TempGroup group = cursor.group(index);
-            if (!TempCode.isPlausibleWind(group, cursor.speedUnit())) {
-                if (index >= cursor.size()) {
-                    cursor.remark(cursor.size() - 1, "REPORT_CUT_OFF", "The report ends inside a level. What stands before was read; ask for the report again.");
-                } else {
-                    cursor.remarkShift(index, "the winds behind '" + heights + "' that follow were dropped.");
-                    index++;
-                    while (index < cursor.size() && cursor.group(index).text().charAt(0) != '9') {
-                        index++;
-                    }
-                }
-                break;
-            }
-            int count = 10 * (heights.charAt(1) - '0') + heights.charAt(i) - '0';
-            Set<Significance> significance = EnumSet.of(count == 0 ? Significance.SURFACE : Significance.SIGNIFICANT_WIND);
-            cursor.addLevel(Double.NaN, count == 0 ? Double.NaN : count * step, Double.NaN, Double.NaN, cursor.wind(index), significance);
-            index++;
+            winds += TempCode.isDigit(heights.charAt(i)) ? 1 : 0;
         }
-        cursor.moveTo(index);
+        boolean complete = cursor.endsLevels(first + winds) || leads(cursor.group(first + winds)) || cursor.group(first + winds).text().equals(TENS_OF_METRES);
+        for (int i = first; i < first + winds; i++) {
+            complete &= TempCode.isPlausibleWind(cursor.group(i), cursor.speedUnit()) && !TempCursor.isLaterSection(cursor.group(i).text());
+        }
+        if (!complete) {
+            cursor.remarkShift(Math.min(first, cursor.size() - 1), "the winds behind '" + heights + "' are not as many as it announces and were dropped.");
+            int next = first;
+            while (next < cursor.size() && !cursor.endsLevels(next) && !leads(cursor.group(next)) && !cursor.group(next).text().equals(TENS_OF_METRES)) {
+                next++;
+            }
+            cursor.moveTo(next);
+            return;
+        }
+        double step = heights.charAt(0) == '8' ? LARGE_UNIT : unit;
+        int index = first;
+        for (int i = 2; i < 5; i++) {
+            if (TempCode.isDigit(heights.charAt(i))) {
+                int count = 10 * (heights.charAt(1) - '0') + heights.charAt(i) - '0';
+                Set<Significance> significance = EnumSet.of(count == 0 ? Significance.SURFACE : Significance.SIGNIFICANT_WIND);
+                cursor.addLevel(Double.NaN, count == 0 ? Double.NaN : count * step, Double.NaN, Double.NaN, cursor.wind(index), significance);
+                index++;
+            }
+        }
+        cursor.moveTo(first + winds);
+    }
+
+    private static boolean leads(TempGroup group) {
+        return group.isValue() && (group.text().charAt(0) == '9' || group.text().charAt(0) == '8') && TempCode.isDigit(group.text().charAt(1))
+                && !group.text().startsWith("99");
     }
 
     private void readTensOfMetres() {
@@ -118,15 +127,25 @@ final class PilotWinds {
     }
 
     private void readFrom(int first, int count) {
-        int index = cursor.at() + 1;
-        for (int i = first; i < Math.min(first + count, STANDARD.length) && index < cursor.size(); i++, index++) {
-            if (!TempCode.isPlausibleWind(cursor.group(index), cursor.speedUnit())) {
-                cursor.remarkShift(index, "the winds of this row that follow were dropped.");
-                break;
-            }
-            cursor.addLevel(100.0 * STANDARD[i], Double.NaN, Double.NaN, Double.NaN, cursor.wind(index), EnumSet.of(Significance.STANDARD));
+        int begin = cursor.at() + 1;
+        boolean complete = first + count <= STANDARD.length
+                && (cursor.endsLevels(begin + count) || cursor.group(begin + count).isValue() && "4567".indexOf(cursor.group(begin + count).text().charAt(0)) >= 0);
+        for (int i = begin; i < begin + count; i++) {
+            complete &= TempCode.isPlausibleWind(cursor.group(i), cursor.speedUnit());
         }
-        cursor.moveTo(index);
+        if (!complete) {
+            cursor.remarkShift(Math.min(begin, cursor.size() - 1), "the winds of this row are not as many as it announces and were dropped.");
+            int next = begin;
+            while (next < cursor.size() && !cursor.endsLevels(next) && "4567".indexOf(cursor.group(next).text().charAt(0)) < 0) {
+                next++;
+            }
+            cursor.moveTo(next);
+            return;
+        }
+        for (int i = 0; i < count; i++) {
+            cursor.addLevel(100.0 * STANDARD[first + i], Double.NaN, Double.NaN, Double.NaN, cursor.wind(begin + i), EnumSet.of(Significance.STANDARD));
+        }
+        cursor.moveTo(begin + count);
     }
 
     /** {@code 77PPP} with a pressure, or {@code 7HHHH} with a height in tens of metres. */

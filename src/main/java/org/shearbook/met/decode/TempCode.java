@@ -1,5 +1,6 @@
 package org.shearbook.met.decode;
 
+import org.shearbook.met.profile.StandardAtmosphere;
 import org.shearbook.met.profile.Units;
 
 /**
@@ -14,6 +15,10 @@ final class TempCode {
 
     private static final double LOWEST_TEMPERATURE = Units.celsiusToKelvin(-100);
     private static final double HIGHEST_TEMPERATURE = Units.celsiusToKelvin(55);
+
+    /** Room for the coldest surface and the warmest polar stratosphere [K]; common practice, no source. */
+    private static final double MUCH_COLDER = 65;
+    private static final double MUCH_WARMER = 37;
 
     private TempCode() {
     }
@@ -71,13 +76,25 @@ final class TempCode {
         return areDigits(group, 3, 5) && group.charAt(3) == '5' && group.charAt(4) >= '1' && group.charAt(4) <= '5';
     }
 
-    /** Whether the group can be a temperature: a value that occurs, and no unused depression. */
-    static boolean isPlausibleTemperature(TempGroup group) {
+    /**
+     * Whether the group can be the temperature at a pressure: no unused depression, and no further from the standard
+     * atmosphere than the climate goes. For telling groups apart only, not a check of what was measured.
+     *
+     * @param pressure [Pa]; {@code NaN} when unknown
+     */
+    static boolean isPlausibleTemperature(TempGroup group, double pressure) {
         if (!group.isValue() || usesUnusedDepression(group.text())) {
             return false;
         }
         double temperature = temperature(group.text());
-        return Double.isNaN(temperature) ? group.text().startsWith("//") : temperature >= LOWEST_TEMPERATURE && temperature <= HIGHEST_TEMPERATURE;
+        if (Double.isNaN(temperature)) {
+            return group.text().startsWith("//");
+        }
+        if (!StandardAtmosphere.covers(pressure)) {
+            return temperature >= LOWEST_TEMPERATURE && temperature <= HIGHEST_TEMPERATURE;
+        }
+        double standard = StandardAtmosphere.temperature(StandardAtmosphere.pressureAltitude(pressure));
+        return temperature >= standard - MUCH_COLDER && temperature <= standard + MUCH_WARMER;
     }
 
     static boolean isPlausibleWind(TempGroup group, double unit) {

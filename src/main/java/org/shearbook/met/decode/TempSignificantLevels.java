@@ -13,6 +13,7 @@ final class TempSignificantLevels {
 
     private static final String WIND_SECTION = "21212";
     private static final int SOUGHT_AHEAD = 12;
+    private static final int LOOKED_AHEAD = 4;
     /** How many numbers may be lost before a pair of equal figures is not taken for a number any more. */
     private static final int NUMBERS_LOST = 3;
 
@@ -70,8 +71,8 @@ final class TempSignificantLevels {
         }
         int number = numberOf(cursor.group(at));
         double pressure = pressureOf(figures);
-        boolean lost = !values.isValue() || TempCursor.isLaterSection(values.text()) && !levelBeginsAfter(at + 2, number, pressure)
-                || !levelBeginsAfter(at + 2, number, pressure) && isNumbered(values, number, pressure);
+        int behind = chain(at + 2, number, pressure);
+        boolean lost = !values.isValue() || chain(at + 1, number, pressure) > behind || behind == 0 && cursor.group(at + 2).isValue();
         lastNumber = number;
         lastPressure = pressure;
         if (lost) {
@@ -119,6 +120,28 @@ final class TempSignificantLevels {
 
     private boolean levelBeginsAfter(int index, int number, double pressure) {
         return cursor.endsLevels(index) || !winds && cursor.group(index).text().equals(WIND_SECTION) || isNumbered(cursor.group(index), number, pressure);
+    }
+
+    /** How many levels in a row, up to a few, can be made out from a place on; the end and another section count as all of them. */
+    private int chain(int index, int number, double pressure) {
+        int length = 0;
+        int at = index;
+        int lastOfChain = number;
+        double pressureOfChain = pressure;
+        while (length < LOOKED_AHEAD) {
+            if (cursor.endsLevels(at) || !winds && cursor.group(at).text().equals(WIND_SECTION)) {
+                return LOOKED_AHEAD;
+            }
+            if (!isNumbered(cursor.group(at), lastOfChain, pressureOfChain)) {
+                return length;
+            }
+            lastOfChain = numberOf(cursor.group(at));
+            String figures = cursor.group(at).text().substring(2);
+            pressureOfChain = TempCode.areDigits(figures, 0, 3) ? pressureOf(figures) : pressureOfChain;
+            length++;
+            at += 2;
+        }
+        return length;
     }
 
     /** Whether the group is a level's first one that may follow the given level: next in number, or a few later and higher up. */

@@ -292,19 +292,27 @@ class TempDecoderTests {
     @Test
     void aLostGroupCostsItsOwnLevelOnly() {
         DecodedSounding sounding = only(TempSamples.PART_A.replace(" 03958 33024", " 33024"));
-        assertThat(sounding.levels()).hasSize(14);
-        assertThat(sounding.levels().get(4).hasTemperature()).isFalse();
-        assertThat(sounding.levels().get(4).hasWind()).isFalse();
-        level(sounding.levels().get(5), 500, 5650, -17.3, 8, 310, 31);
-        assertThat(sounding.remarks()).extracting(Remark::code).contains("GROUP_SHIFTED");
+        assertThat(sounding.levels()).as("all but 700 hPa").hasSize(13).noneMatch(l -> l.pressure() == 70_000);
+        level(sounding.levels().get(3), 850, 1531, 4.2, 10, 20, 25);
+        level(sounding.levels().get(4), 500, 5650, -17.3, 8, 310, 31);
+        assertThat(sounding.remarks()).anyMatch(r -> r.code().equals("GROUP_SHIFTED") && r.line() == 2 && r.column() == 19);
     }
 
     @Test
     void aDoubledGroupCostsItsOwnLevelOnly() {
         DecodedSounding sounding = only(TempSamples.PART_A.replace(" 50565 17358 31031", " 50565 17358 17358 31031"));
-        assertThat(sounding.levels()).hasSize(14);
-        level(sounding.levels().get(6), 400, 7280, -28.5, 9, 305, 42);
+        assertThat(sounding.levels()).as("all but 500 hPa").hasSize(13).noneMatch(l -> l.pressure() == 50_000);
+        level(sounding.levels().get(5), 400, 7280, -28.5, 9, 305, 42);
         assertThat(sounding.remarks()).extracting(Remark::code).contains("GROUP_SHIFTED");
+    }
+
+    @Test
+    void aHeightOutOfPlaceCostsNothingButItself() {
+        DecodedSounding sounding = only(TempSamples.PART_A.replace(" 50565 ", " 50065 "));
+        assertThat(sounding.levels()).hasSize(14);
+        level(sounding.levels().get(4), 700, 3098, -3.9, 8, 330, 24);
+        level(sounding.levels().get(5), 500, Double.NaN, -17.3, 8, 310, 31);
+        assertThat(sounding.remarks()).extracting(Remark::code).contains("HEIGHT_IMPLAUSIBLE");
     }
 
     @Test
@@ -319,6 +327,13 @@ class TempDecoderTests {
         DecodedSounding sounding = only(TempSamples.PART_B.replace(" 22925 06869", " 229250 06869"));
         assertThat(sounding.levels()).hasSize(10);
         assertThat(sounding.levels()).noneMatch(l -> l.pressure() == 92_500);
+        assertThat(sounding.remarks()).extracting(Remark::code).contains("GROUP_SHIFTED");
+    }
+
+    @Test
+    void aPilotRowWithAWindTooFewIsDropped() {
+        DecodedSounding sounding = only(TempSamples.HEIGHT_WINDS.replace("90346 00518 02021 36028", "90346 00518 36028"));
+        assertThat(sounding.levels()).hasSize(5);
         assertThat(sounding.remarks()).extracting(Remark::code).contains("GROUP_SHIFTED");
     }
 
