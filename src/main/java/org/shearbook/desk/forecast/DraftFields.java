@@ -54,19 +54,24 @@ public final class DraftFields {
     private static final DateTimeFormatter MINUTE = DateTimeFormatter.ofPattern("yyyy-MM-dd'T'HH:mm'Z'", Locale.ROOT).withZone(ZoneOffset.UTC);
     private static final Pattern CLOCK = Pattern.compile("([01]\\d|2[0-3]):?([0-5]\\d)\\s*Z?");
     private static final Pattern LEVEL = Pattern.compile("(?:FL)?\\s*(\\d{1,3})", Pattern.CASE_INSENSITIVE);
+    private static final Pattern NAME_AND_POSITION = Pattern.compile("(.+?)\\s+([NS]\\d{4}\\s?[EW]\\d{5})");
     private static final Pattern POSITION = Pattern.compile(
             "([NS])\\s?(\\d{2})[°\\s]?(\\d{2})?'?[\\s/,]*([EW])\\s?(\\d{3})[°\\s]?(\\d{2})?'?"
                     + "|(\\d{2})[°\\s]?(\\d{2})?'?\\s?([NS])[\\s/,]*(\\d{3})[°\\s]?(\\d{2})?'?\\s?([EW])", Pattern.CASE_INSENSITIVE);
 
     private final Map<String, String> fields;
     private final Instant now;
-    private final Function<String, Optional<Area.Corner>> places;
+    private final Function<String, Optional<Place>> places;
     private final List<Refusal> refusals = new ArrayList<>();
 
-    private DraftFields(Map<String, String> fields, Instant now, Function<String, Optional<Area.Corner>> places) {
+    private DraftFields(Map<String, String> fields, Instant now, Function<String, Optional<Place>> places) {
         this.fields = fields;
         this.now = now;
         this.places = places;
+    }
+
+    /** A station or fix by the name it has at the desk. */
+    record Place(String name, double latitude, double longitude) {
     }
 
     /**
@@ -82,7 +87,7 @@ public final class DraftFields {
      * @param now    against which a time of day without a date is understood: the nearest such moment
      * @param places finds a station or fix by what was typed
      */
-    static Reading read(Map<String, String> fields, Instant now, Function<String, Optional<Area.Corner>> places) {
+    static Reading read(Map<String, String> fields, Instant now, Function<String, Optional<Place>> places) {
         return new DraftFields(fields, now, places).read();
     }
 
@@ -255,27 +260,21 @@ public final class DraftFields {
             refuse(CENTRE, "CENTRE_MISSING", "The middle of the radius is not given.", "Give a station, a fix or a position such as N4712 W03000.");
             return null;
         }
-        Optional<Area.Corner> position = readPosition(centre);
-        String name = "";
-        if (position.isEmpty()) {
+        Optional<Place> place = readPosition(centre).map(position -> new Place("", position.latitude(), position.longitude()));
+        if (place.isEmpty()) {
             // "Kelbrith N4712 W03000": a name with its position, as an earlier version wrote it
-            Matcher parts = Pattern.compile("(.+?)\\s+([NS]\\d{4}\\s?[EW]\\d{5})").matcher(centre);
-            if (parts.matches()) {
-                position = readPosition(parts.group(2));
-                name = parts.group(1);
-            } else {
-                position = places.apply(centre);
-                name = centre;
-            }
+            Matcher parts = NAME_AND_POSITION.matcher(centre);
+            place = parts.matches() ? readPosition(parts.group(2)).map(position -> new Place(parts.group(1), position.latitude(), position.longitude()))
+                    : places.apply(centre);
         }
-        if (position.isEmpty()) {
-            refuse(CENTRE, "CENTRE_NOT_KNOWN", "\"%s\" is no known station or fix and no position.".formatted(shortened(centre)),
+        if (place.isEmpty()) {
+            refuse(CENTRE, "CENTRE_NOT_KNOWN", "\"%s\" is no known station, no position, and not the name of exactly one fix.".formatted(shortened(centre)),
                     "Write a position as N4712 W03000, or the station's identifier as the page Stations and Fixes shows it.");
         }
-        if (position.isEmpty() || miles == null) {
+        if (place.isEmpty() || miles == null) {
             return null;
         }
-        return new Area.Radius(name, minute(position.get().latitude()), minute(position.get().longitude()), miles);
+        return new Area.Radius(place.get().name(), minute(place.get().latitude()), minute(place.get().longitude()), miles);
     }
 
     private static double minute(double degrees) {

@@ -24,7 +24,13 @@ public record Evidence(Kind kind, long id, String label) {
         return kind + " " + id + " " + label;
     }
 
-    static Optional<Evidence> read(String ticked) {
+    /** What identifies it: {@code LAYER 41}. */
+    public String reference() {
+        return kind + " " + id;
+    }
+
+    /** Reads what {@link #ticked()} wrote. */
+    public static Optional<Evidence> read(String ticked) {
         Matcher parts = TICKED.matcher(ticked.strip());
         return parts.matches() ? Optional.of(new Evidence(Kind.valueOf(parts.group(1)), Long.parseLong(parts.group(2)), parts.group(3)))
                 : Optional.empty();

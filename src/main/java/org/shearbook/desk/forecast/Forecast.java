@@ -1,5 +1,6 @@
 package org.shearbook.desk.forecast;
 
+import java.time.Duration;
 import java.time.Instant;
 import org.jspecify.annotations.Nullable;
 
@@ -43,6 +44,15 @@ public record Forecast(ForecastId id, int number, int version, State state, Fore
     public boolean isLive(Instant at) {
         Standing standing = standing(at);
         return standing == Standing.IN_FORCE || standing == Standing.UPCOMING;
+    }
+
+    /** Minutes of its validity gone by at a moment, from 0 to {@link #minutesLong()}. */
+    public long minutesGone(Instant at) {
+        return Math.max(0, Math.min(minutesLong(), Duration.between(content.validFrom(), at).toMinutes()));
+    }
+
+    public long minutesLong() {
+        return Duration.between(content.validFrom(), content.validUntil()).toMinutes();
     }
 
     /** When it ended or will end: the cancellation, or the end of its validity. */

@@ -9,7 +9,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
-import java.util.function.Function;
 import org.jspecify.annotations.Nullable;
 import org.shearbook.desk.audit.Actor;
 import org.shearbook.desk.audit.AsKnownAt;
@@ -19,6 +18,8 @@ import org.shearbook.desk.staff.NotHoldingDesk;
 import org.shearbook.desk.staff.Person;
 import org.shearbook.desk.staff.PersonBook;
 import org.shearbook.desk.staff.Role;
+import org.shearbook.desk.station.Fix;
+import org.shearbook.desk.station.StationBook;
 import org.springframework.context.ApplicationEventPublisher;
 import org.springframework.data.domain.Limit;
 import org.springframework.stereotype.Service;
@@ -35,6 +36,7 @@ public class ForecastBook {
     private final ForecastDraftRepository drafts;
     private final DeskHoldingBook holdings;
     private final PersonBook people;
+    private final StationBook stations;
     private final AuditTrail audit;
     private final ApplicationEventPublisher events;
     private final Clock clock;
@@ -42,11 +44,12 @@ public class ForecastBook {
     private final ForecastText texts;
 
     ForecastBook(ForecastVersionRepository forecasts, ForecastDraftRepository drafts, DeskHoldingBook holdings, PersonBook people,
-            AuditTrail audit, ApplicationEventPublisher events, Clock clock, ForecastSettings settings) {
+            StationBook stations, AuditTrail audit, ApplicationEventPublisher events, Clock clock, ForecastSettings settings) {
         this.forecasts = forecasts;
         this.drafts = drafts;
         this.holdings = holdings;
         this.people = people;
+        this.stations = stations;
         this.audit = audit;
         this.events = events;
         this.clock = clock;
@@ -89,7 +92,7 @@ public class ForecastBook {
 
     private ForecastDraft keepDraft(Actor actor, ForecastId id, int seen, ForecastDraft.Purpose purpose, @Nullable Integer basedOn,
             Map<String, String> fields, Map<String, String> prefilled, String reason) {
-        mayDraft(actor);
+        refuseUnlessMayDraft(actor);
         if (reason.length() > DraftFields.LONGEST_FIELD) {
             throw new ForecastRefused(ForecastRules.reason(reason));
         }
@@ -119,7 +122,7 @@ public class ForecastBook {
     /** Puts a draft away for good. */
     @Transactional
     public ForecastDraft discard(Actor actor, ForecastId id, int seen) {
-        mayDraft(actor);
+        refuseUnlessMayDraft(actor);
         Instant recordedAt = audit.recordingMoment();
         ForecastDraft discarded = closed(actor, openDraft(id, seen), ForecastDraft.State.DISCARDED, recordedAt);
         events.publishEvent(new ForecastDrafted(actor, discarded));
@@ -141,14 +144,12 @@ public class ForecastBook {
 
     /**
      * Checks a draft without filing it.
-     *
-     * @param places finds a station or fix by what was typed
      */
     @Transactional(readOnly = true)
-    public Check check(ForecastDraft draft, Function<String, Optional<Area.Corner>> places) {
+    public Check check(ForecastDraft draft) {
         Instant now = clock.instant();
         Forecast standing = draft.purpose() == ForecastDraft.Purpose.NEW ? null : find(draft.id(), AsKnownAt.now()).orElse(null);
-        DraftFields.Reading reading = DraftFields.read(draft.fields(), now, places);
+        DraftFields.Reading reading = DraftFields.read(draft.fields(), now, this::place);
         List<Refusal> refusals = new ArrayList<>(reading.refusals());
         ForecastContent content = reading.content();
         if (content != null) {
@@ -171,21 +172,34 @@ public class ForecastBook {
     }
 
     /**
+     * What these fields say, without keeping anything.
+     *
+     * @throws ForecastRefused when a field can't be read
+     */
+    @Transactional(readOnly = true)
+    public ForecastContent read(Map<String, String> fields) {
+        DraftFields.Reading reading = DraftFields.read(DraftFields.kept(fields, clock.instant()), clock.instant(), this::place);
+        if (reading.content() == null) {
+            throw new ForecastRefused(reading.refusals());
+        }
+        return reading.content();
+    }
+
+    /**
      * Files an open draft: issues it, or the amendment or correction it holds.
      *
      * @param seen          the version of the draft that was checked
      * @param checkedNumber the number on the check page; null where nobody read the text before
-     * @param places        finds a station or fix by what was typed
      * @throws NotHoldingDesk  when the actor does not hold the desk
      * @throws ForecastRefused when it can't be filed as it stands
      * @throws StaleForecast   when the draft, the forecast it changes or the next number is another by now
      */
     @Transactional
-    public Forecast issue(Actor actor, ForecastId id, int seen, @Nullable Integer checkedNumber, Function<String, Optional<Area.Corner>> places) {
+    public Forecast issue(Actor actor, ForecastId id, int seen, @Nullable Integer checkedNumber) {
         Instant recordedAt = audit.recordingMoment();
         ForecastDraft draft = openDraft(id, seen);
         mayFile(actor, draft.purpose() == ForecastDraft.Purpose.NEW ? "issue a forecast" : "amend or correct a forecast");
-        DraftFields.Reading reading = DraftFields.read(draft.fields(), clock.instant(), places);
+        DraftFields.Reading reading = DraftFields.read(draft.fields(), clock.instant(), this::place);
         if (reading.content() == null) {
             throw new ForecastRefused(reading.refusals());
         }
@@ -202,12 +216,6 @@ public class ForecastBook {
         }
         closed(actor, draft, ForecastDraft.State.FILED, recordedAt);
         return filed;
-    }
-
-    /** As {@link #issue(Actor, ForecastId, int, Integer, Function)}, for a draft whose positions are all given in degrees. */
-    @Transactional
-    public Forecast issue(Actor actor, ForecastId id, int seen) {
-        return issue(actor, id, seen, null, name -> Optional.empty());
     }
 
     /**
@@ -296,6 +304,12 @@ public class ForecastBook {
         return forecasts.between(from, until, asKnownAt.moment()).stream().map(ForecastVersionEntity::toForecast).toList();
     }
 
+    /** The newest version of each forecast whose validity meets the window, in the order of their numbers; {@code after} is the number to go on from. */
+    @Transactional(readOnly = true)
+    public List<Forecast> page(Instant from, Instant until, int after, int limit, AsKnownAt asKnownAt) {
+        return forecasts.page(from, until, after, asKnownAt.moment(), Limit.of(limit)).stream().map(ForecastVersionEntity::toForecast).toList();
+    }
+
     /** The open draft of a new forecast, an amendment or a correction. */
     @Transactional(readOnly = true)
     public Optional<ForecastDraft> openDraft(ForecastId id, AsKnownAt asKnownAt) {
@@ -342,6 +356,18 @@ public class ForecastBook {
         return refusals;
     }
 
+    /** A station by any of its identifiers or its name; else a fix, if only one has that name. */
+    private Optional<DraftFields.Place> place(String typed) {
+        Optional<DraftFields.Place> station = stations.find(typed, AsKnownAt.now())
+                .or(() -> stations.all(AsKnownAt.now()).stream().filter(known -> known.name().equalsIgnoreCase(typed.strip())).findFirst())
+                .map(known -> new DraftFields.Place(known.name(), known.latitude(), known.longitude()));
+        if (station.isPresent()) {
+            return station;
+        }
+        List<Fix> fixes = stations.fixes(typed, AsKnownAt.now());
+        return fixes.size() == 1 ? Optional.of(new DraftFields.Place(fixes.get(0).identifier(), fixes.get(0).latitude(), fixes.get(0).longitude())) : Optional.empty();
+    }
+
     /** Whether this person may be the second look of somebody else's forecast. */
     public static boolean mayLook(Person person) {
         return person.enabled() && person.roles().stream().anyMatch(Set.of(Role.FORECASTER, Role.SCIENTIST, Role.SUPERVISOR)::contains);
@@ -367,8 +393,13 @@ public class ForecastBook {
         }
     }
 
-    private static void mayDraft(Actor actor) {
-        if (Arrays.stream(actor.role().split(",")).noneMatch(Set.of(Role.FORECASTER.name(), Role.SUPERVISOR.name())::contains)) {
+    /** Whether this person writes forecasts at all. */
+    public static boolean mayDraft(Actor actor) {
+        return Arrays.stream(actor.role().split(",")).anyMatch(Set.of(Role.FORECASTER.name(), Role.SUPERVISOR.name())::contains);
+    }
+
+    private static void refuseUnlessMayDraft(Actor actor) {
+        if (!mayDraft(actor)) {
             throw new MayNotDraft();
         }
     }

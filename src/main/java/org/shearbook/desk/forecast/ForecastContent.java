@@ -40,6 +40,16 @@ public record ForecastContent(
                 && Area.mayOverlap(area, other.area);
     }
 
+    /** The area in words: its short name if it has one, else its limits. */
+    public String place() {
+        return placeName.isBlank() ? ForecastText.where(area) : placeName;
+    }
+
+    /** The area's limits in words: {@code 46°42'N to 47°42'N, 029°24'W to 030°48'W}. */
+    public String limits() {
+        return ForecastText.where(area);
+    }
+
     /** The word that always stands beside the number: possible, even chance, probable, very probable. */
     public String probabilityWord() {
         return probabilityPercent >= 90 ? "very probable" : probabilityPercent >= 70 ? "probable" : probabilityPercent >= 40 ? "even chance" : "possible";

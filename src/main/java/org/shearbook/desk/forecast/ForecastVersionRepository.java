@@ -30,6 +30,10 @@ interface ForecastVersionRepository extends Repository<ForecastVersionEntity, Lo
     @Query("select f from ForecastVersionEntity f where f.validFrom < :until and f.validUntil > :from and f.recordedAt <= :moment order by f.slfNumber, f.version")
     List<ForecastVersionEntity> between(Instant from, Instant until, Instant moment);
 
+    @Query("select f from ForecastVersionEntity f where f.validFrom < :until and f.validUntil > :from and f.slfNumber > :after and "
+            + NEWEST + " order by f.slfNumber")
+    List<ForecastVersionEntity> page(Instant from, Instant until, int after, Instant moment, Limit limit);
+
     @Query("select coalesce(max(f.slfNumber), 0) from ForecastVersionEntity f")
     int highestNumber();
 }

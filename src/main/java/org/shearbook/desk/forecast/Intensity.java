@@ -20,6 +20,11 @@ public enum Intensity {
         return code;
     }
 
+    /** Whether severe turbulence is expected at all. */
+    public boolean mentionsSevere() {
+        return this != MOD;
+    }
+
     public String words() {
         return words;
     }

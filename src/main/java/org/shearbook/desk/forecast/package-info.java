@@ -7,7 +7,7 @@
  * <b>Tables.</b> {@code forecast_version} and {@code forecast_evidence} for what was issued;
  * {@code forecast_draft} for what was only thought of, which an office forgets after a month.
  */
-@ApplicationModule(displayName = "Shear-layer Forecasts", allowedDependencies = {"staff", "audit", "shell"})
+@ApplicationModule(displayName = "Shear-layer Forecasts", allowedDependencies = {"airreport", "station", "staff", "audit", "shell", "decode"})
 @NullMarked
 package org.shearbook.desk.forecast;
 

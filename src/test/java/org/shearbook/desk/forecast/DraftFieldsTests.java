@@ -18,7 +18,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 class DraftFieldsTests {
 
     private static final Instant NOW = Instant.parse("2031-03-12T22:40:00Z");
-    private static final Function<String, Optional<Area.Corner>> NO_PLACES = name -> Optional.empty();
+    private static final Function<String, Optional<DraftFields.Place>> NO_PLACES = name -> Optional.empty();
 
     @Test
     void aCompleteContentReadsBackAsItWas() {
@@ -97,9 +97,9 @@ class DraftFieldsTests {
     void aStationIsFoundByWhatWasTyped() {
         Map<String, String> fields = roundFields();
         fields.put("centre", "XVKE");
-        ForecastContent content = DraftFields.read(fields, NOW, name -> Optional.of(new Area.Corner(47.2001, -30.0001))).content();
+        ForecastContent content = DraftFields.read(fields, NOW, name -> Optional.of(new DraftFields.Place("Kelbrith", 47.2001, -30.0001))).content();
         // positions of a forecast are whole minutes
-        assertThat(content.area()).isEqualTo(new Area.Radius("XVKE", 47.2, -30, 60));
+        assertThat(content.area()).isEqualTo(new Area.Radius("Kelbrith", 47.2, -30, 60));
     }
 
     @ParameterizedTest

@@ -135,14 +135,14 @@ class ForecastBookRepositoryTests {
         void onlyTheHolderFilesAndOthersMayDraft() {
             Forecast first = issued(ForecastSamples.moderate(clock.instant()));
             ForecastDraft draft = forecasts.draft(C, ForecastSamples.moderate(clock.instant()));
-            assertThatThrownBy(() -> forecasts.issue(C, draft.id(), 1)).isInstanceOf(NotHoldingDesk.class);
+            assertThatThrownBy(() -> forecasts.issue(C, draft.id(), 1, null)).isInstanceOf(NotHoldingDesk.class);
             assertThatThrownBy(() -> forecasts.amend(C, first.id(), 1, first.content(), "wider area")).isInstanceOf(NotHoldingDesk.class);
             assertThatThrownBy(() -> forecasts.correct(C, first.id(), 1, first.content(), "typed wrong")).isInstanceOf(NotHoldingDesk.class);
             assertThatThrownBy(() -> forecasts.cancel(C, first.id(), 1, "layer is gone")).isInstanceOf(NotHoldingDesk.class);
             assertThat(forecasts.versions(first.id(), AsKnownAt.now())).containsExactly(first);
             assertThatThrownBy(() -> forecasts.draft(Actor.named("slf-o", "OBSERVER", false, "WS-2"), Map.of(), Map.of())).isInstanceOf(MayNotDraft.class);
             // the holder may file what a colleague drafted
-            assertThat(forecasts.issue(B, draft.id(), 1).author()).isEqualTo("slf-b");
+            assertThat(forecasts.issue(B, draft.id(), 1, null).author()).isEqualTo("slf-b");
         }
 
         @Test
@@ -150,14 +150,14 @@ class ForecastBookRepositoryTests {
             ForecastDraft draft = forecasts.draft(B, ForecastSamples.moderate(clock.instant()));
             vacate();
             holdings.take(C);
-            assertThatThrownBy(() -> forecasts.issue(B, draft.id(), 1)).isInstanceOf(NotHoldingDesk.class);
+            assertThatThrownBy(() -> forecasts.issue(B, draft.id(), 1, null)).isInstanceOf(NotHoldingDesk.class);
             assertThat(forecasts.openDraft(draft.id(), AsKnownAt.now())).isPresent();
         }
 
         @Test
         void aRefusedForecastLeavesTheDraftAndGivesNoNumber() {
             ForecastDraft draft = forecasts.draft(B, ForecastSamples.withLevels(ForecastSamples.moderate(clock.instant()), 310, 270));
-            assertThatThrownBy(() -> forecasts.issue(B, draft.id(), 1)).isInstanceOf(ForecastRefused.class).hasMessageContaining("Base FL310 is not below top FL270");
+            assertThatThrownBy(() -> forecasts.issue(B, draft.id(), 1, null)).isInstanceOf(ForecastRefused.class).hasMessageContaining("Base FL310 is not below top FL270");
             assertThat(forecasts.openDraft(draft.id(), AsKnownAt.now())).contains(draft);
             Forecast next = issued(ForecastSamples.moderate(clock.instant()));
             assertThat(issued(ForecastSamples.moderate(clock.instant())).number()).isEqualTo(next.number() + 1);
@@ -185,7 +185,7 @@ class ForecastBookRepositoryTests {
             forecasts.discard(B, draft.id(), 2);
             assertThat(forecasts.openDraft(draft.id(), AsKnownAt.now())).isEmpty();
             assertThat(forecasts.openDraft(draft.id(), new AsKnownAt(revised.recordedAt()))).contains(revised);
-            assertThatThrownBy(() -> forecasts.issue(B, draft.id(), 2)).isInstanceOf(UnknownForecast.class);
+            assertThatThrownBy(() -> forecasts.issue(B, draft.id(), 2, null)).isInstanceOf(UnknownForecast.class);
         }
 
         @Test
@@ -201,13 +201,13 @@ class ForecastBookRepositoryTests {
             Map<String, String> fields = new java.util.HashMap<>(DraftFields.of(first.content()));
             fields.put(DraftFields.TOP, "320");
             ForecastDraft draft = forecasts.revise(B, first.id(), 0, ForecastDraft.Purpose.AMENDMENT, 1, fields, Map.of(), "");
-            ForecastBook.Check early = forecasts.check(draft, name -> java.util.Optional.empty());
+            ForecastBook.Check early = forecasts.check(draft);
             assertThat(early.text()).isNull();
             assertThat(early.refusals()).extracting(Refusal::field).containsExactly("reason");
             draft = forecasts.revise(B, first.id(), draft.version(), ForecastDraft.Purpose.AMENDMENT, 1, fields, Map.of(), "report at FL318");
-            ForecastBook.Check check = forecasts.check(draft, name -> java.util.Optional.empty());
+            ForecastBook.Check check = forecasts.check(draft);
             assertThat(check.refusals()).isEmpty();
-            Forecast amended = forecasts.issue(B, first.id(), draft.version());
+            Forecast amended = forecasts.issue(B, first.id(), draft.version(), null);
             assertThat(amended.text()).isEqualTo(check.text()).contains("version 2 (amended)").contains("FL270 to FL320");
             assertThat(amended.reason()).isEqualTo("report at FL318");
         }
@@ -215,12 +215,12 @@ class ForecastBookRepositoryTests {
         @Test
         void theTextOnTheCheckPageIsTheTextThatIsFiled() {
             ForecastDraft draft = forecasts.draft(B, ForecastSamples.moderate(clock.instant()));
-            ForecastBook.Check check = forecasts.check(draft, name -> java.util.Optional.empty());
+            ForecastBook.Check check = forecasts.check(draft);
             Forecast other = issued(ForecastSamples.moderate(clock.instant()));
             assertThat(other.number()).isEqualTo(check.number());
-            assertThatThrownBy(() -> forecasts.issue(B, draft.id(), 1, check.number(), name -> java.util.Optional.empty())).isInstanceOf(StaleForecast.class);
-            ForecastBook.Check again = forecasts.check(draft, name -> java.util.Optional.empty());
-            assertThat(forecasts.issue(B, draft.id(), 1, again.number(), name -> java.util.Optional.empty()).text()).isEqualTo(again.text());
+            assertThatThrownBy(() -> forecasts.issue(B, draft.id(), 1, check.number())).isInstanceOf(StaleForecast.class);
+            ForecastBook.Check again = forecasts.check(draft);
+            assertThat(forecasts.issue(B, draft.id(), 1, again.number()).text()).isEqualTo(again.text());
             assertThat(again.overlaps()).contains(other);
         }
 
@@ -247,7 +247,7 @@ class ForecastBookRepositoryTests {
         void manyWhoIssueAtOnceGetNumbersWithoutGapOrDouble() throws Exception {
             List<ForecastDraft> drafts = java.util.stream.IntStream.range(0, 6).mapToObj(i -> forecasts.draft(B, ForecastSamples.moderate(clock.instant()))).toList();
             ExecutorService issuers = Executors.newFixedThreadPool(6);
-            List<Future<Forecast>> filed = issuers.invokeAll(drafts.stream().<Callable<Forecast>>map(draft -> () -> forecasts.issue(B, draft.id(), 1)).toList(), 60, TimeUnit.SECONDS);
+            List<Future<Forecast>> filed = issuers.invokeAll(drafts.stream().<Callable<Forecast>>map(draft -> () -> forecasts.issue(B, draft.id(), 1, null)).toList(), 60, TimeUnit.SECONDS);
             issuers.shutdown();
             List<Integer> numbers = new java.util.ArrayList<>();
             for (Future<Forecast> one : filed) {
@@ -261,12 +261,12 @@ class ForecastBookRepositoryTests {
         @Test
         void theSecondLookMustBeSomebodyWhoMay() {
             ForecastDraft draft = forecasts.draft(B, ForecastSamples.severe(clock.instant(), "slf-o", null));
-            assertThatThrownBy(() -> forecasts.issue(B, draft.id(), 1)).isInstanceOf(ForecastRefused.class).hasMessageContaining("slf-o");
+            assertThatThrownBy(() -> forecasts.issue(B, draft.id(), 1, null)).isInstanceOf(ForecastRefused.class).hasMessageContaining("slf-o");
         }
 
         private Forecast issued(ForecastContent content) {
             ForecastDraft draft = forecasts.draft(B, content);
-            return forecasts.issue(B, draft.id(), draft.version());
+            return forecasts.issue(B, draft.id(), draft.version(), null);
         }
     }
 }
