@@ -13,7 +13,7 @@ import java.util.List;
  *
  * @param until after {@code from}
  */
-record TimeShown(Instant from, Instant until) {
+public record TimeShown(Instant from, Instant until) {
 
     /** Half of it past, half to come, on whole hours. */
     static TimeShown day(Instant now) {
