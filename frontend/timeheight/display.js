@@ -102,8 +102,9 @@ class TimeHeight {
       return { name, canvas, frame, figure };
     };
     const hidden = this.display.hiddenByDistance ?? 0;
+    const unlevelled = this.display.withoutLevel ? `, ${this.display.withoutLevel} without a level` : '';
     this.observed = pane('observed', 'Observed',
-      `soundings, and reports within ${this.display.distanceNm} NM; ${hidden} hidden by distance`);
+      `soundings, and reports within ${this.display.distanceNm} NM; ${hidden} hidden by distance${unlevelled}`);
     this.forecast = pane('forecast', 'Forecast', 'shear-layer forecasts in force and their earlier versions');
     this.panes = [this.observed, this.forecast];
     this.frameOfPanes = make('div', { className: 'panes' }, this.observed.figure, this.forecast.figure);

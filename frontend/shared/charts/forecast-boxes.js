@@ -1,8 +1,8 @@
 /*
  * Chart.js plugin: forecasts as boxes in time and level. Moderate is a single outline, severe a double one whose
- * second line is broken where severe is expected occasionally; a superseded version is a thin dotted ghost, a cancelled one is struck by a diagonal. `source()` gives
- * `{from, until, base, top, label, intensity, probability, superseded, cancelled, chosen}`; `faint()` draws outlines
- * only, for the pane whose subject is something else.
+ * second line is broken where severe is expected occasionally; a superseded version is a thin dotted ghost, a
+ * cancelled one is struck by a diagonal. `source()` gives `{from, until, base, top, label, intensity, probability,
+ * superseded, cancelled, chosen}`; `faint()` draws outlines only, for the pane whose subject is something else.
  */
 import { inside, labelFont, textFont, textWithHalo } from './draw.js';
 import { isOccasionallySevere, mainGrade } from '../lib/intensity.js';

@@ -13,6 +13,7 @@ import org.shearbook.desk.audit.Actor;
 import org.shearbook.desk.audit.AsKnownAt;
 import org.shearbook.desk.audit.AuditTrail;
 import org.shearbook.met.decode.DecodedAirReport;
+import org.shearbook.met.profile.GreatCircle;
 import org.springframework.context.ApplicationEventPublisher;
 import org.springframework.data.domain.Limit;
 import org.springframework.stereotype.Service;
@@ -151,6 +152,28 @@ public class AirReportArchive {
     @Transactional(readOnly = true)
     public List<AirReport> between(Instant from, Instant until, AsKnownAt asKnownAt) {
         return reports.between(from, until, asKnownAt.moment()).stream().map(AirReportEntity::toReport).toList();
+    }
+
+    /**
+     * Reports observed from {@code from} on and before {@code until} whose place lies within a distance of a position,
+     * in the order of their observation.
+     *
+     * @param latitude  [degrees north]
+     * @param longitude [degrees east]
+     * @param distance  along the great circle [m]
+     */
+    @Transactional(readOnly = true)
+    public List<AirReport> near(Instant from, Instant until, double latitude, double longitude, double distance, AsKnownAt asKnownAt) {
+        double up = Math.toDegrees(distance / GreatCircle.EARTH_RADIUS);
+        double across = Math.abs(latitude) + up >= 89 ? 180 : Math.toDegrees(Math.asin(Math.sin(Math.toRadians(up)) / Math.cos(Math.toRadians(latitude))));
+        double west = longitude - across;
+        double east = longitude + across;
+        // a box over the date line is two boxes; twice the same where it is not
+        double otherWest = west < -180 ? west + 360 : east > 180 ? -180 : west;
+        double otherEast = west < -180 ? 180 : east > 180 ? east - 360 : east;
+        return reports.near(from, until, latitude - up, latitude + up, west, east, otherWest, otherEast, asKnownAt.moment()).stream()
+                .filter(report -> GreatCircle.distance(latitude, longitude, report.latitudeDeg, report.longitudeDeg) <= distance)
+                .map(AirReportEntity::toReport).toList();
     }
 
     /**

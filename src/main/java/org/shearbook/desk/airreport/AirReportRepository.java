@@ -31,6 +31,17 @@ interface AirReportRepository extends Repository<AirReportEntity, Long> {
             order by r.observedAt, r.reportId""")
     List<AirReportEntity> between(Instant from, Instant until, Instant moment);
 
+    /** Of one window in time and up to two of longitude, since an area may lie on the date line. */
+    @Query("""
+            select r from AirReportEntity r where r.observedAt >= :from and r.observedAt < :until
+              and r.latitudeDeg between :south and :north
+              and (r.longitudeDeg between :west and :east or r.longitudeDeg between :otherWest and :otherEast)
+              and r.version =
+              (select max(n.version) from AirReportEntity n where n.reportId = r.reportId and n.recordedAt <= :moment)
+            order by r.observedAt, r.reportId""")
+    List<AirReportEntity> near(Instant from, Instant until, double south, double north, double west, double east, double otherWest, double otherEast,
+            Instant moment);
+
     /** Newest first, from just before a place in that order on. */
     @Query("""
             select r from AirReportEntity r where r.observedAt >= :from and r.observedAt < :until

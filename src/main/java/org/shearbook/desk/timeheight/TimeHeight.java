@@ -11,8 +11,8 @@ import org.jspecify.annotations.Nullable;
  * @param asKnownAt            the moment whose knowledge this is; null for now
  * @param windowM              full width at half maximum of the window behind every Ri, shear and N² [m]
  * @param distanceNm           reports and forecasts farther from the station are not drawn
- * @param hiddenByDistance     how many reports that left out
- * @param withoutPlaceOrLevel  reports of turbulence that cannot be drawn because they do not say where or how high
+ * @param hiddenByDistance     how many reports that left out, of those within the widest distance offered
+ * @param withoutLevel         how many reports within the distance do not say how high, and cannot be drawn
  * @param columns              soundings whose column meets the time shown, in the order of their release
  * @param boxes                every version of every forecast that meets time and distance
  * @param reports              in the order of their observation
@@ -20,7 +20,7 @@ import org.jspecify.annotations.Nullable;
  */
 public record TimeHeight(
         Place station, Instant from, Instant until, @Nullable Instant asKnownAt, double windowM, int distanceNm, int hiddenByDistance,
-        int withoutPlaceOrLevel, List<Column> columns, List<Box> boxes, List<Report> reports, @Nullable Instant lastSoundingBefore) {
+        int withoutLevel, List<Column> columns, List<Box> boxes, List<Report> reports, @Nullable Instant lastSoundingBefore) {
 
     public TimeHeight {
         columns = List.copyOf(columns);

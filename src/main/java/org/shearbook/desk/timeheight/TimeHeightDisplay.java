@@ -158,20 +158,19 @@ public class TimeHeightDisplay {
 
         List<TimeHeight.Report> drawn = new ArrayList<>();
         int hidden = 0;
-        int unplaced = 0;
-        for (AirReport report : reports.between(time.from(), time.until(), asKnownAt)) {
+        int unlevelled = 0;
+        double widest = DISTANCES.get(DISTANCES.size() - 1) * Units.NAUTICAL_MILE;
+        for (AirReport report : reports.near(time.from(), time.until(), station.latitude(), station.longitude(), widest, asKnownAt)) {
             if (report.worstIntensity() == null) {
-                continue;
-            }
-            Double level = levelOf(report);
-            if (level == null || !report.place().isResolved()) {
-                unplaced++;
                 continue;
             }
             double away = GreatCircle.distance(station.latitude(), station.longitude(), report.place().latitude(), report.place().longitude())
                     / Units.NAUTICAL_MILE;
+            Double level = levelOf(report);
             if (away > distance) {
                 hidden++;
+            } else if (level == null) {
+                unlevelled++;
             } else {
                 drawn.add(report(report, level, away, station, versions.values()));
             }
@@ -181,7 +180,7 @@ public class TimeHeightDisplay {
         return new TimeHeight(
                 new TimeHeight.Place(station.id(), station.name(), station.latitude(), station.longitude(),
                         Double.isNaN(station.elevation()) ? null : station.elevation()),
-                time.from(), time.until(), asKnownAt.isNow() ? null : asKnownAt.moment(), AnalysisBook.defaultWindow(), distance, hidden, unplaced,
+                time.from(), time.until(), asKnownAt.isNow() ? null : asKnownAt.moment(), AnalysisBook.defaultWindow(), distance, hidden, unlevelled,
                 columns, boxes, drawn, before.isEmpty() ? null : nominalOf(before.get(0)));
     }
 

@@ -160,6 +160,17 @@ class TimeHeightControllerTests {
     }
 
     @Test
+    void reportsOnTheOtherSideOfTheDateLineAreNear() throws Exception {
+        station("THAJ", "Jarrow", -50, 179.5);
+        station("THAK", "Kerrin", -51, -179.5);
+        keepReport(AirReports.automatic(Instant.parse("2031-03-12T05:00:00Z"), 0.3, 290, -50.5, -179.6));
+        keepReport(AirReports.automatic(Instant.parse("2031-03-12T05:10:00Z"), 0.3, 290, -50.5, 179.6));
+        for (String station : List.of("THAJ", "THAK")) {
+            web.perform(get("/api/v1/time-height?station=" + station + SHOWN)).andExpect(jsonPath("$.reports", hasSize(2)));
+        }
+    }
+
+    @Test
     void everyVersionOfAForecastIsABoxAndAReportIsInsideTheOneInForce() throws Exception {
         station("THAD", "Dorrin", -20, 30);
         Instant from = clock.instant();
