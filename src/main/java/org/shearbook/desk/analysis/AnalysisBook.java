@@ -13,6 +13,7 @@ import org.shearbook.desk.sounding.Sounding;
 import org.shearbook.desk.sounding.SoundingArchive;
 import org.shearbook.desk.sounding.SoundingId;
 import org.shearbook.desk.sounding.SoundingKept;
+import org.shearbook.met.profile.RoundedCornerFunction;
 import org.shearbook.met.richardson.RichardsonAnalysis;
 import org.slf4j.Logger;
 import org.slf4j.LoggerFactory;
@@ -60,6 +61,11 @@ public class AnalysisBook {
     /** The window of everything that is kept [m]. */
     public static double defaultWindow() {
         return RichardsonAnalysis.DEFAULT_WINDOW;
+    }
+
+    /** Standard deviation [m] of the Gaussian whose full width at half maximum is the window. */
+    public static double smoothing(double window) {
+        return RoundedCornerFunction.standardDeviation(window);
     }
 
     @EventListener
@@ -188,5 +194,4 @@ public class AnalysisBook {
     private static double orNaN(@Nullable Double value) {
         return value == null ? Double.NaN : value;
     }
-
 }
