@@ -293,7 +293,7 @@ class TimeHeightControllerTests {
 
     private Forecast issue(org.shearbook.desk.forecast.ForecastContent content) {
         var draft = forecasts.draft(B, content);
-        return forecasts.issue(B, draft.id(), draft.version());
+        return forecasts.issue(B, draft.id(), draft.version(), null);
     }
 
     private JsonNode answer(String station, String shown) throws Exception {
