@@ -28,6 +28,7 @@ import org.shearbook.met.decode.MessageDecoders;
 import org.shearbook.met.decode.Rejection;
 import org.shearbook.met.decode.Remark;
 import org.shearbook.met.profile.VerticalProfile;
+import org.shearbook.met.quality.SoundingQuality;
 import org.springframework.context.ApplicationEventPublisher;
 import org.springframework.data.domain.Limit;
 import org.springframework.stereotype.Service;
@@ -316,6 +317,13 @@ public class SoundingArchive {
             ascent.add(0, timed ? sounding : at(sounding, receivedAt));
         }
         return new Reading(inOrder.stream().map(ascent -> notKept(ascent, receivedAt)).toList(), rejected);
+    }
+
+    /** One message with the flags of its levels, nothing kept. */
+    @Transactional(readOnly = true)
+    public List<LevelView> levels(DecodedSounding message) {
+        Site site = Site.of(message, stations.find(message.stationId(), AsKnownAt.now()).orElse(null));
+        return SoundingQuality.check(message.levels(), site.elevation(), null).levels().stream().map(LevelView::of).toList();
     }
 
     private static DecodedSounding at(DecodedSounding untimed, Instant receivedAt) {

@@ -49,7 +49,7 @@ class AccessRules {
                         .access(anyOf("ROLE_FORECASTER", "ROLE_SCIENTIST", "ROLE_SUPERVISOR", "ROLE_OBSERVER", "SCOPE_messages"))
                         .requestMatchers(HttpMethod.GET, "/api/v1/**").access(peopleOr("SCOPE_read"))
                         .requestMatchers(HttpMethod.PUT, "/api/v1/stations", "/api/v1/fixes").hasRole("ADMINISTRATOR")
-                        .requestMatchers("/intake/messages").hasAnyRole("FORECASTER", "SCIENTIST", "SUPERVISOR", "OBSERVER")
+                        .requestMatchers(HttpMethod.POST, "/intake/**").hasAnyRole("FORECASTER", "SCIENTIST", "SUPERVISOR", "OBSERVER")
                         .requestMatchers(HttpMethod.POST, "/stations/**").hasRole("ADMINISTRATOR")
                         .anyRequest().access(anyOf(PEOPLE)))
                 .formLogin(login -> login.loginPage("/login").defaultSuccessUrl("/", true).permitAll())
