@@ -54,6 +54,11 @@ final class BulletinText {
         }
     }
 
+    /** White space, and the control characters that frame a bulletin on the line. */
+    static boolean isBlank(char c) {
+        return c == ' ' || c == '\t' || c == '\r' || c == '\n' || c >= 1 && c <= 4;
+    }
+
     /** As received. */
     String text() {
         return text;

@@ -15,6 +15,8 @@ public final class MessageDecoders {
                 new TempDecoder(),
                 new CsvSoundingDecoder(),
                 new CsvAirReportDecoder(),
+                new AmdarDecoder(),
+                new AirepDecoder(),
                 new PilotReportDecoder()));
     }
 

@@ -38,6 +38,7 @@ public final class PilotReportDecoder implements MessageDecoder {
             Pattern.compile("([A-Z]{4}\\d{0,2}) {1,3}([A-Z]{4}) {1,3}(\\d{2})(\\d{2})(\\d{2})(?: {1,3}[A-Z]{3})?");
     private static final Pattern MARK = Pattern.compile("(?:([A-Z0-9]{2,5}) {1,3})?(?:[A-Z0-9]{2,5} {1,3})?(UUA|UA) {0,3}(?=/)");
     private static final Pattern SEQUENCE = Pattern.compile("(?:ZCZC ?[A-Z0-9 ]{0,12}|NNNN|\\d{1,5})");
+    private static final Pattern WHITE_SPACE = Pattern.compile("\\s+");
     private static final Pattern CLOCK = Pattern.compile("(\\d{2}):?(\\d{2}) ?(?:Z|UTC)?");
     private static final Pattern WIND = Pattern.compile("(\\d{3})[ /@]?(\\d{2,3})(?:G\\d{2,3})? ?(?:KTS?)?");
     private static final Pattern TEMPERATURE = Pattern.compile("(?:OAT ?)?(M|MS|-|\\+|P|PS)? ?(\\d{1,2})(?: ?C)?");
@@ -156,7 +157,7 @@ public final class PilotReportDecoder implements MessageDecoder {
                 last--;
             }
             int begin = from;
-            while (begin < first && isBlank(text.text().charAt(begin))) {
+            while (begin < first && BulletinText.isBlank(text.text().charAt(begin))) {
                 begin++;
             }
             if (first == last && begin < first) {
@@ -194,11 +195,6 @@ public final class PilotReportDecoder implements MessageDecoder {
             if (endsWithEquals || !openIsReport) {
                 close();
             }
-        }
-
-        /** White space, and the control characters that frame a bulletin on the line. */
-        private static boolean isBlank(char c) {
-            return c == ' ' || c == '\t' || c == '\r' || c == '\n' || c >= 1 && c <= 4;
         }
 
         private boolean isEnvelope(int first, int last) {
@@ -331,7 +327,7 @@ public final class PilotReportDecoder implements MessageDecoder {
             int to = openTo;
             openFrom = -1;
             closedTo = -1;
-            while (to > from && isBlank(text.text().charAt(to - 1))) {
+            while (to > from && BulletinText.isBlank(text.text().charAt(to - 1))) {
                 to--;
             }
             if (!openIsReport) {
@@ -422,7 +418,7 @@ public final class PilotReportDecoder implements MessageDecoder {
                 }
                 int start = groups.start(Tag.RM);
                 int end = capitals.charAt(to - 1) == '=' ? Math.max(start, to - 1) : to;
-                return text.text(start, end).replaceAll("\\s+", " ").strip();
+                return WHITE_SPACE.matcher(text.text(start, end)).replaceAll(" ").strip();
             }
 
             private @Nullable Instant observedAt() {

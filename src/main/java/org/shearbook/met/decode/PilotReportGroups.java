@@ -15,6 +15,8 @@ final class PilotReportGroups {
     /** The groups by their letters. */
     enum Tag { OV, TM, FL, TP, SK, WX, TA, WV, TB, IC, RM }
 
+    private static final Tag[] TAGS = Tag.values();
+
     private final Map<Tag, StringBuilder> texts = new EnumMap<>(Tag.class);
     private final Set<Tag> filled = EnumSet.noneOf(Tag.class);
     private final Map<Tag, Integer> starts = new EnumMap<>(Tag.class);
@@ -60,7 +62,7 @@ final class PilotReportGroups {
         if (at + 2 > to) {
             return null;
         }
-        for (Tag tag : Tag.values()) {
+        for (Tag tag : TAGS) {
             if (capitals.startsWith(tag.name(), at)) {
                 return tag;
             }

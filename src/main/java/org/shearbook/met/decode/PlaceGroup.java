@@ -27,6 +27,10 @@ final class PlaceGroup {
 
     private static final int MOST_LEGS = 12;
 
+    private static final Pattern BLANKS = Pattern.compile(" {2,}");
+    private static final Pattern WORD = Pattern.compile("[A-Z]+");
+    private static final Pattern DASH = Pattern.compile(" ?- ?");
+    private static final List<String> PREFACES = List.of("/", "OV ", "OV/", "OVR ", "OVER ", "O/", "VCNTY ", "VC ", "NEAR ", "AT ");
     private static final Pattern IDENTIFIER = Pattern.compile("[A-Z0-9]{2,5}");
     private static final Pattern GLUED_RADIAL = Pattern.compile("[A-Z0-9]{7,12}");
     private static final Pattern SPACED_RADIAL =
@@ -61,7 +65,7 @@ final class PlaceGroup {
      */
     Place read(String group) {
         text = group.strip();
-        String place = withoutPreface(text.replaceAll(" {2,}", " "));
+        String place = withoutPreface(BLANKS.matcher(text).replaceAll(" "));
         if (place.length() > LONGEST) {
             remark.accept("PLACE_NOT_READ", "The place is longer than any place. Set it by hand from the text.");
             return unresolved(List.of());
@@ -93,7 +97,7 @@ final class PlaceGroup {
             return offset(behind.group(2), behind.group(3), behind.group(4), behind.group(1));
         }
         if (place.indexOf('-') > 0) {
-            return segment(place.split(" ?- ?", MOST_LEGS + 1));
+            return segment(DASH.split(place, MOST_LEGS + 1));
         }
         if (IDENTIFIER.matcher(place).matches()) {
             return leadingStation("PLACE_UNKNOWN", "No fix or aerodrome " + place + " is known; the leading station stands for it. Load " + place
@@ -113,7 +117,7 @@ final class PlaceGroup {
 
     private static String withoutPreface(String place) {
         String rest = place;
-        for (String preface : List.of("/", "OV ", "OV/", "OVR ", "OVER ", "O/", "VCNTY ", "VC ", "NEAR ", "AT ")) {
+        for (String preface : PREFACES) {
             if (rest.startsWith(preface)) {
                 rest = rest.substring(preface.length()).strip();
             }
@@ -133,9 +137,12 @@ final class PlaceGroup {
     }
 
     private static boolean namesRunway(String place) {
-        for (String word : place.split("[ /]")) {
-            String letters = word.replaceAll("\\d.*", "");
-            switch (letters) {
+        Matcher words = WORD.matcher(place);
+        while (words.find()) {
+            if (digitsFollow(place, words.end()) >= 5) {
+                continue;
+            }
+            switch (words.group()) {
                 case "RWY", "RY", "RUNWAY", "RWYS", "FINAL", "FNL", "FIN", "APCH", "APRCH", "APPROACH", "ARR", "ARRIVAL", "DEP",
                         "DEPT", "DEPARTURE", "DEPARTING", "ILS", "RNAV", "GPS", "PATTERN", "DOWNWIND", "BASE", "DURD", "DURC",
                         "FAP", "DRCLMB" -> {
@@ -145,6 +152,15 @@ final class PlaceGroup {
             }
         }
         return false;
+    }
+
+    /** A radial and a distance behind the letters make them a fix, whatever they spell. */
+    private static int digitsFollow(String place, int from) {
+        int end = from;
+        while (end < place.length() && place.charAt(end) >= '0' && place.charAt(end) <= '9') {
+            end++;
+        }
+        return end - from;
     }
 
     private Place coordinates(Coordinates coordinates) {
