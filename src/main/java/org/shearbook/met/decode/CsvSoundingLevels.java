@@ -51,6 +51,10 @@ final class CsvSoundingLevels {
     private record Offence(int line, int column, String code, String text) {
     }
 
+    /** Where a level stands: two rows with the same place are one level. */
+    private record Place(double pressure, double height, double elapsed) {
+    }
+
     /** @param position index of the column of each quantity the table has */
     CsvSoundingLevels(List<SoundingColumn> columns, Map<Quantity, Integer> position, List<CsvSoundingTable.Row> rows, RemarkList remarks) {
         this.columns = columns;
@@ -62,7 +66,7 @@ final class CsvSoundingLevels {
     /** @throws Unreadable naming the first place that can't be, and how many more there are */
     List<ReportedLevel> read() throws Unreadable {
         List<ReportedLevel> levels = new ArrayList<>(rows.size());
-        Map<List<Double>, Integer> places = new HashMap<>();
+        Map<Place, Integer> places = new HashMap<>();
         double lastPressure = Double.NaN;
         int rises = 0;
         for (CsvSoundingTable.Row row : rows) {
@@ -79,7 +83,7 @@ final class CsvSoundingLevels {
             if (Double.isNaN(level.pressure()) && Double.isNaN(level.height())) {
                 remarks.add(row.line(), 0, "LEVEL_WITHOUT_HEIGHT", "The row has neither pressure nor height; it can't be placed.");
             } else {
-                Integer before = places.putIfAbsent(List.of(level.pressure(), level.height(), level.elapsed()), levels.size());
+                Integer before = places.putIfAbsent(new Place(level.pressure(), level.height(), level.elapsed()), levels.size());
                 if (before != null && levels.get(before).equals(level)) {
                     remarks.add(row.line(), 0, "LEVEL_REPEATED", "The row repeats an earlier one and was left out.");
                     continue;
@@ -164,9 +168,11 @@ final class CsvSoundingLevels {
     }
 
     private Set<Significance> significance(CsvSoundingTable.Row row) {
+        if (row.levelType().isEmpty()) {
+            return Set.of();
+        }
         Set<Significance> significance = EnumSet.noneOf(Significance.class);
-        String rest = row.levelType().toLowerCase(Locale.ROOT);
-        for (String word : rest.split("[|+; ]")) {
+        for (String word : row.levelType().toLowerCase(Locale.ROOT).split("[|+; ]")) {
             Significance one = LEVEL_TYPES.get(word);
             if (one != null) {
                 significance.add(one);

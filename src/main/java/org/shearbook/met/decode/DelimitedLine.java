@@ -45,19 +45,22 @@ final class DelimitedLine {
             while (i < line.length() && line.charAt(i) == ' ') {
                 i++;
             }
-            StringBuilder text = new StringBuilder();
+            String text = "";
             if (i < line.length() && line.charAt(i) == '"') {
+                StringBuilder quoted = new StringBuilder();
                 i++;
                 while (i < line.length() && (line.charAt(i) != '"' || i + 1 < line.length() && line.charAt(i + 1) == '"')) {
-                    text.append(line.charAt(i));
+                    quoted.append(line.charAt(i));
                     i += line.charAt(i) == '"' ? 2 : 1;
                 }
                 i++;
+                text = quoted.toString();
             }
-            while (i < line.length() && line.charAt(i) != separator) {
-                text.append(line.charAt(i++));
-            }
-            cells.add(new Cell(text.toString().strip(), start + 1));
+            int end = i < line.length() ? line.indexOf(separator, i) : -1;
+            end = end < 0 ? line.length() : end;
+            text += line.substring(Math.min(i, end), end);
+            i = end;
+            cells.add(new Cell(text.strip(), start + 1));
             if (i >= line.length()) {
                 return cells;
             }
