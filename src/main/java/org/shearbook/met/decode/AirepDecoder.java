@@ -70,7 +70,9 @@ public final class AirepDecoder implements MessageDecoder {
                 line -> BEGINNING.matcher(line).lookingAt(), line -> false)) {
             String raw = text.text(piece.from(), piece.to()).strip();
             Report report = piece.isReport() ? new Report(text, capitals, piece, context) : null;
-            if (report == null) {
+            if (piece.isTooLong()) {
+                rejected.add(piece.tooLong(text));
+            } else if (report == null) {
                 rejected.add(new Rejection(text.lineAt(piece.from()), text.columnAt(piece.from()), "NOT_A_REPORT",
                         "The line belongs to no air-report. If it is part of one join them; otherwise reject it.", raw));
             } else if (!report.read()) {

@@ -59,7 +59,9 @@ public final class AmdarDecoder implements MessageDecoder {
         List<Rejection> rejected = new ArrayList<>();
         for (BulletinReports.Piece piece : BulletinReports.split(text, capitals, context.receivedAt(),
                 line -> BEGINNING.matcher(line).matches(), line -> SECTION.matcher(line).matches())) {
-            if (piece.isReport()) {
+            if (piece.isTooLong()) {
+                rejected.add(piece.tooLong(text));
+            } else if (piece.isReport()) {
                 messages.add(new Report(text, capitals, piece).read(context.receivedAt()));
             } else {
                 rejected.add(new Rejection(text.lineAt(piece.from()), text.columnAt(piece.from()), "NOT_A_REPORT",

@@ -30,6 +30,15 @@ final class BulletinReports {
      * @param headingAt moment of the heading above it; null when there is none
      */
     record Piece(int from, int to, boolean isReport, @Nullable Instant headingAt) {
+
+        boolean isTooLong() {
+            return to - from > 2 * LONGEST;
+        }
+
+        Rejection tooLong(BulletinText text) {
+            return new Rejection(text.lineAt(from), text.columnAt(from), "REPORT_TOO_LONG", "The report is longer than " + 2 * LONGEST
+                    + " characters: line ends or equals signs are missing. Cut it by hand and send the parts.", text.text(from, to).strip());
+        }
     }
 
     private final BulletinText text;
