@@ -5,6 +5,7 @@ import java.security.SecureRandom;
 import java.time.Instant;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
@@ -187,6 +188,22 @@ public class AirReportArchive {
                 : reports.find(after.value(), asKnownAt.moment()).orElseThrow(() -> new UnknownAirReport(after));
         return reports.newest(from, until, last == null ? AsKnownAt.now().moment() : last.observedAt, last == null ? Long.MAX_VALUE : last.reportId,
                 asKnownAt.moment(), Limit.of(limit)).stream().map(AirReportEntity::toReport).toList();
+    }
+
+    /**
+     * As {@link #newest}, of the reports whose place lies within a distance of a position; one without a place never does.
+     *
+     * @param latitude  [degrees north]
+     * @param longitude [degrees east]
+     * @param distance  along the great circle [m]
+     */
+    @Transactional(readOnly = true)
+    public List<AirReport> newestNear(double latitude, double longitude, double distance, Instant from, Instant until, @Nullable AirReportId after,
+            AsKnownAt asKnownAt, int limit) {
+        AirReport last = after == null ? null : find(after, asKnownAt).orElseThrow(() -> new UnknownAirReport(after));
+        Comparator<AirReport> newestFirst = Comparator.comparing(AirReport::observedAt).thenComparing(report -> report.id().value()).reversed();
+        return near(from, until, latitude, longitude, distance, asKnownAt).stream().sorted(newestFirst)
+                .filter(report -> last == null || newestFirst.compare(report, last) > 0).limit(limit).toList();
     }
 
     /**

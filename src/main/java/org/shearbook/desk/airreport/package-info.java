@@ -6,7 +6,7 @@
  * <b>Tables.</b> {@code air_report_version}; and {@code air_report_identity}, the only one from which rows may go:
  * it holds what names an aircraft, and the versions keep no more than a salted digest of it.
  */
-@ApplicationModule(displayName = "Air Reports", allowedDependencies = {"audit", "shell", "staff", "profile", "decode"})
+@ApplicationModule(displayName = "Air Reports", allowedDependencies = {"audit", "shell", "station", "staff", "profile", "decode"})
 @NullMarked
 package org.shearbook.desk.airreport;
 

@@ -16,6 +16,7 @@ import org.shearbook.desk.audit.AsKnownAt;
 import org.shearbook.desk.shell.Moments;
 import org.shearbook.desk.shell.UnreadableMoment;
 import org.shearbook.desk.staff.CurrentActor;
+import org.shearbook.desk.station.StationBook;
 import org.springframework.http.HttpStatus;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
@@ -36,43 +37,57 @@ class AirReportController {
     private static final Duration SHOWN_AT_FIRST = Duration.ofHours(24);
 
     private final AirReportArchive archive;
+    private final StationBook stations;
     private final CurrentActor actor;
     private final Clock clock;
 
-    AirReportController(AirReportArchive archive, CurrentActor actor, Clock clock) {
+    AirReportController(AirReportArchive archive, StationBook stations, CurrentActor actor, Clock clock) {
         this.archive = archive;
+        this.stations = stations;
         this.actor = actor;
         this.clock = clock;
     }
 
     @GetMapping
     String list(@RequestParam(required = false) @Nullable String from, @RequestParam(required = false) @Nullable String until,
+            @RequestParam(required = false) @Nullable String station, @RequestParam(required = false) @Nullable String distanceNm,
             @RequestParam(required = false) @Nullable Long after, AsKnownAt asKnownAt, Model model) {
         Instant now = asKnownAt.isNow() ? clock.instant() : asKnownAt.moment();
         Instant start = now.minus(SHOWN_AT_FIRST).truncatedTo(ChronoUnit.HOURS);
         Instant end = null;
+        NearStation near = null;
         try {
             Instant asked = Moments.read("from", from);
             // A field emptied on purpose asks for everything; one not there yet for the last day.
             start = asked != null ? asked : from != null ? Moments.EARLIEST : start;
             end = Moments.read("until", until);
+            near = NearStation.read(station, distanceNm, stations, asKnownAt);
         } catch (UnreadableMoment unreadable) {
             model.addAttribute("refusedField", unreadable.field());
             model.addAttribute("refused", unreadable.said());
+        } catch (NearStation.Refused refused) {
+            model.addAttribute("refusedField", refused.field());
+            model.addAttribute("refused", refused.getMessage());
         }
-        List<AirReport> found = found(start, end, after, asKnownAt);
+        List<AirReport> found = found(near, start, end, after, asKnownAt);
         List<AirReport> shown = found.size() > PAGE ? found.subList(0, PAGE) : found;
         model.addAttribute("rows", shown.stream().map(AirReportPage::of).toList());
         model.addAttribute("from", from != null ? from : start.toString());
         model.addAttribute("until", until);
+        model.addAttribute("stations", stations.all(asKnownAt));
+        model.addAttribute("station", near == null ? station : near.station().id());
+        model.addAttribute("distanceNm", distanceNm == null || distanceNm.isBlank() ? "%.0f".formatted(NearStation.USUAL_NM) : distanceNm);
         model.addAttribute("older", found.size() > PAGE ? shown.get(PAGE - 1).id().value() : null);
         model.addAttribute("asKnownAt", asKnownAt.isNow() ? null : asKnownAt.moment());
         return "airreport/air-reports";
     }
 
-    private List<AirReport> found(Instant start, @Nullable Instant end, @Nullable Long after, AsKnownAt asKnownAt) {
+    private List<AirReport> found(@Nullable NearStation near, Instant start, @Nullable Instant end, @Nullable Long after, AsKnownAt asKnownAt) {
+        Instant until = end == null ? Moments.LATEST : end;
+        AirReportId last = after == null ? null : new AirReportId(after);
         try {
-            return archive.newest(start, end == null ? Moments.LATEST : end, after == null ? null : new AirReportId(after), asKnownAt, PAGE + 1);
+            return near == null ? archive.newest(start, until, last, asKnownAt, PAGE + 1)
+                    : archive.newestNear(near.station().latitude(), near.station().longitude(), near.distance(), start, until, last, asKnownAt, PAGE + 1);
         } catch (UnknownAirReport unknown) {
             throw new ResponseStatusException(HttpStatus.NOT_FOUND, unknown.getMessage(), unknown);
         }

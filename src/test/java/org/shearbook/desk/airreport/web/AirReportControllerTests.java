@@ -23,6 +23,7 @@ import org.shearbook.desk.airreport.Attribution;
 import org.shearbook.desk.airreport.Kept;
 import org.shearbook.desk.audit.Actor;
 import org.shearbook.desk.audit.AsKnownAt;
+import org.shearbook.desk.station.StationBook;
 import org.shearbook.testing.OnH2;
 import org.springframework.beans.factory.annotation.Autowired;
 import org.springframework.security.test.context.support.WithAnonymousUser;
@@ -37,6 +38,7 @@ class AirReportControllerTests {
 
     @Autowired MockMvc web;
     @Autowired AirReportArchive archive;
+    @Autowired StationBook stations;
     @Autowired TransactionTemplate transaction;
 
     private static final Actor FEED = Actor.named("feed", "messages", false, "server");
@@ -132,6 +134,30 @@ class AirReportControllerTests {
         web.perform(get("/api/v1/air-reports").param("from", "2031-02-10").param("until", "2031-02-11").param("after", kept.get(1).id().toString()))
                 .andExpect(jsonPath("$.airReports", hasSize(1))).andExpect(jsonPath("$.next").value(nullValue()));
         web.perform(get("/api/v1/air-reports").param("limit", "0")).andExpect(status().isBadRequest());
+    }
+
+    @Test
+    void reportsNearAStationAreThoseWithinTheDistance() throws Exception {
+        stations.keep(Actor.named("administrator-t", "ADMINISTRATOR", false, "WS-1"), "Arlenmoor", 60, -30, 20, List.of("AR-NEAR"));
+        Instant start = Instant.parse("2031-02-20T00:00:00Z");
+        // Exact: one degree of latitude is 60.04 NM on a sphere of 6371.0 km.
+        List<Kept> kept = transaction.execute(status -> archive.keepAll(FEED, List.of(
+                AirReports.automatic(start, 0.1, 300, 60.9, -30), AirReports.automatic(start.plusSeconds(60), 0.2, 300, 61.1, -30),
+                AirReports.automatic(start.plusSeconds(120), 0.3, 300, 60, -30)), start));
+        web.perform(get("/api/v1/air-reports").param("from", "2031-02-20").param("until", "2031-02-21").param("station", "AR-NEAR").param("distanceNm", "60"))
+                .andExpect(jsonPath("$.airReports", hasSize(2))).andExpect(jsonPath("$.airReports[1].id").value(kept.get(0).id().value()));
+        web.perform(get("/api/v1/air-reports").param("from", "2031-02-20").param("until", "2031-02-21").param("station", "AR-NEAR")
+                .param("after", kept.get(2).id().toString()).param("limit", "1"))
+                .andExpect(jsonPath("$.airReports", hasSize(1))).andExpect(jsonPath("$.airReports[0].id").value(kept.get(1).id().value()))
+                .andExpect(jsonPath("$.next").value(kept.get(1).id().value()));
+        for (String distance : new String[] {"0", "far", "NaN", "1e9"}) {
+            web.perform(get("/api/v1/air-reports").param("station", "AR-NEAR").param("distanceNm", distance)).andExpect(status().isBadRequest())
+                    .andExpect(jsonPath("$.field").value("distanceNm"));
+        }
+        web.perform(get("/air-reports").param("station", "NOWHERE")).andExpect(status().isOk())
+                .andExpect(content().string(containsString("There is no station NOWHERE.")));
+        web.perform(get("/air-reports").param("from", "2031-02-20").param("until", "2031-02-21").param("station", "AR-NEAR").param("distanceNm", "60"))
+                .andExpect(content().string(containsString("selected=\"selected\">Arlenmoor"))).andExpect(content().string(containsString("N6054 W03000")));
     }
 
     @Test
