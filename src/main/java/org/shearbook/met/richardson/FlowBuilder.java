@@ -6,7 +6,6 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import org.shearbook.met.profile.HeightBand;
-import org.shearbook.met.profile.RoundedCornerFunction;
 import org.shearbook.met.profile.VerticalProfile;
 
 /** Cuts an ascent at its gaps, averages what is dense, and rounds the corners. */
@@ -14,35 +13,43 @@ final class FlowBuilder {
 
     private final VerticalProfile profile;
     private final double smoothing;
+    private final double[] buoyancy;
 
     /** @param smoothing standard deviation of the smoothing [m] */
     FlowBuilder(VerticalProfile profile, double smoothing) {
+        this(profile, smoothing, buoyancy(profile.virtualPotentialTemperatures()));
+    }
+
+    /**
+     * @param smoothing standard deviation of the smoothing [m]
+     * @param buoyancy  cumulative B at the thermodynamic levels [m s⁻²], in place of that of unsaturated air
+     */
+    FlowBuilder(VerticalProfile profile, double smoothing, double[] buoyancy) {
         this.profile = profile;
         this.smoothing = smoothing;
+        this.buoyancy = buoyancy;
     }
 
     /** Flows from the lowest up; empty when wind and temperature nowhere overlap. */
     List<RoundedFlow> build() {
-        double[] windHeight = profile.windHeights();
+        List<LevelBins> windPieces = windPieces();
+        List<LevelBins> temperaturePieces = temperaturePieces();
         double[] u = profile.eastward();
         double[] v = profile.northward();
-        double[] temperatureHeight = profile.temperatureHeights();
-        double[] thetaV = profile.virtualPotentialTemperatures();
-        List<Piece> windPieces = pieces(windHeight, profile.windGaps(), u, v);
-        List<Piece> temperaturePieces = pieces(temperatureHeight, profile.temperatureGaps(), buoyancy(thetaV));
         List<RoundedFlow> flows = new ArrayList<>();
         int t = 0;
         int w = 0;
         while (t < temperaturePieces.size() && w < windPieces.size()) {
-            Piece temperature = temperaturePieces.get(t);
-            Piece wind = windPieces.get(w);
-            double base = Math.max(temperature.base, wind.base);
-            double top = Math.min(temperature.top, wind.top);
+            LevelBins temperature = temperaturePieces.get(t);
+            LevelBins wind = windPieces.get(w);
+            double base = Math.max(temperature.base(), wind.base());
+            double top = Math.min(temperature.top(), wind.top());
             if (base < top) {
-                flows.add(new RoundedFlow(new HeightBand(base, top), wind.rounded(0), wind.rounded(1),
-                        temperature.rounded(0), temperature.sorted()));
+                double[] b = temperature.averaged(buoyancy);
+                flows.add(new RoundedFlow(new HeightBand(base, top), wind.rounded(wind.averaged(u)), wind.rounded(wind.averaged(v)),
+                        temperature.rounded(b), temperature.rounded(nonDecreasing(b))));
             }
-            if (temperature.top <= wind.top) {
+            if (temperature.top() <= wind.top()) {
                 t++;
             } else {
                 w++;
@@ -60,14 +67,24 @@ final class FlowBuilder {
         return b;
     }
 
-    private List<Piece> pieces(double[] height, List<HeightBand> gaps, double[]... columns) {
-        List<Piece> pieces = new ArrayList<>();
+    /** Stretches of wind levels without a gap, from the lowest up. */
+    List<LevelBins> windPieces() {
+        return pieces(profile.windHeights(), profile.windGaps());
+    }
+
+    /** Stretches of thermodynamic levels without a gap, from the lowest up. */
+    List<LevelBins> temperaturePieces() {
+        return pieces(profile.temperatureHeights(), profile.temperatureGaps());
+    }
+
+    private List<LevelBins> pieces(double[] height, List<HeightBand> gaps) {
+        List<LevelBins> pieces = new ArrayList<>();
         int first = 0;
         for (int k = 1; k <= height.length; k++) {
             boolean cut = k == height.length || isCut(gaps, height[k - 1], height[k]);
             if (cut) {
                 if (k - first >= 2) {
-                    pieces.add(new Piece(height, first, k, columns));
+                    pieces.add(new LevelBins(height, first, k, smoothing));
                 }
                 first = k;
             }
@@ -82,66 +99,6 @@ final class FlowBuilder {
             }
         }
         return false;
-    }
-
-    /** Levels without a gap between them, averaged over bins of a third of the smoothing. */
-    private final class Piece {
-
-        private final double base;
-        private final double top;
-        private final double[] knots;
-        private final double[][] values;
-        private final double[] widths;
-
-        Piece(double[] height, int from, int to, double[][] columns) {
-            base = height[from];
-            top = height[to - 1];
-            double binDepth = smoothing / 3;
-            double[] sumOfHeights = new double[to - from];
-            double[][] sums = new double[columns.length][to - from];
-            int[] count = new int[to - from];
-            int bin = -1;
-            double binNumber = Double.NaN;
-            for (int k = from; k < to; k++) {
-                double number = Math.floor((height[k] - base) / binDepth);
-                if (number != binNumber) {
-                    binNumber = number;
-                    bin++;
-                }
-                count[bin]++;
-                sumOfHeights[bin] += height[k] - base;
-                for (int c = 0; c < columns.length; c++) {
-                    sums[c][bin] += columns[c][k];
-                }
-            }
-            int n = bin + 1;
-            if (n == 1) {
-                // all levels within one bin: nothing finer than their two ends can be said
-                knots = new double[] {base, top};
-                values = new double[columns.length][];
-                for (int c = 0; c < columns.length; c++) {
-                    values[c] = new double[] {columns[c][from], columns[c][to - 1]};
-                }
-            } else {
-                knots = new double[n];
-                values = new double[columns.length][n];
-                for (int i = 0; i < n; i++) {
-                    knots[i] = base + sumOfHeights[i] / count[i];
-                    for (int c = 0; c < columns.length; c++) {
-                        values[c][i] = sums[c][i] / count[i];
-                    }
-                }
-            }
-            widths = RoundedCornerFunction.cornerWidths(knots, smoothing);
-        }
-
-        RoundedCornerFunction rounded(int column) {
-            return new RoundedCornerFunction(knots, values[column], widths);
-        }
-
-        RoundedCornerFunction sorted() {
-            return new RoundedCornerFunction(knots, nonDecreasing(values[0]), widths);
-        }
     }
 
     /**

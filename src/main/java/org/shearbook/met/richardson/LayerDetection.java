@@ -5,7 +5,7 @@ import java.util.EnumSet;
 import java.util.List;
 import java.util.Set;
 import org.shearbook.met.profile.HeightBand;
-import org.shearbook.met.profile.MoistThermodynamics;
+import org.shearbook.met.profile.SaturationRule;
 import org.shearbook.met.profile.ThermodynamicLevel;
 import org.shearbook.met.profile.VerticalProfile;
 import org.shearbook.met.profile.WindLevel;
@@ -16,11 +16,6 @@ final class LayerDetection {
     private static final double GROW = 0.5;
     private static final double GROW_SHEAR_SQUARED = 1e-5;
     private static final int FEW_LEVELS = 3;
-
-    /** Relative humidity over water from which air counts as saturated: the instrument's uncertainty is 4 to 6 %. */
-    private static final double SATURATED_OVER_WATER = 0.95;
-    private static final double SATURATED_OVER_ICE = 1.0;
-    private static final double ICE_BELOW = 258.15;
 
     private final VerticalProfile profile;
     private final List<RoundedFlow> flows;
@@ -165,8 +160,7 @@ final class LayerDetection {
     }
 
     private static boolean isSaturated(double temperature, double dewPoint) {
-        return MoistThermodynamics.relativeHumidityOverWater(temperature, dewPoint) >= SATURATED_OVER_WATER
-                || temperature < ICE_BELOW && MoistThermodynamics.relativeHumidityOverIce(temperature, dewPoint) >= SATURATED_OVER_ICE;
+        return SaturationRule.DEFAULT.of(temperature, dewPoint).isSaturated();
     }
 
     /** A to Z, then AA, AB … as columns of a table are named. */
