@@ -1,5 +1,6 @@
 /**
- * Billow scales from a layer. May use {@code profile} and {@code richardson}.
+ * What billows a layer would have: height, spacing, time, cloud and turbulence, from its wave or by rule. Start with
+ * {@link BillowEstimate}. May use {@code profile}, {@code richardson} and {@code taylorgoldstein}.
  */
 @NullMarked
 package org.shearbook.met.billow;
