@@ -76,8 +76,8 @@ class StationApi {
                 "Nothing was kept. Line " + first.line() + ": " + first.text(), Map.of("lines", refused.refusals())));
     }
 
-    /** @param after the id to go on from; null on the last page */
-    record StationPage(List<StationView> stations, @Nullable String after) {
+    /** @param next give it as {@code after} for the stations that follow; null when these were the last */
+    record StationPage(List<StationView> stations, @Nullable String next) {
     }
 
     record StationView(String id, String name, double latitudeDeg, double longitudeDeg, @Nullable Double elevationM, Set<String> identifiers,
@@ -89,8 +89,8 @@ class StationApi {
         }
     }
 
-    /** @param after the number to go on from; null on the last page */
-    record FixPage(List<FixView> fixes, @Nullable String after) {
+    /** @param next give it as {@code after} for the fixes that follow; null when these were the last */
+    record FixPage(List<FixView> fixes, @Nullable String next) {
     }
 
     record FixView(String identifier, String kind, String name, double latitudeDeg, double longitudeDeg, @Nullable Double elevationM,

@@ -77,6 +77,6 @@ class StationControllerTests {
         mvc.perform(put("/api/v1/stations").contentType("text/csv").content("identifier,latitude_deg,longitude_deg\nZZP1,1,0\nZZP2,1,0\nZZP3,1,0\n").with(ADMINISTRATOR).with(csrf()))
                 .andExpect(status().isOk());
         mvc.perform(get("/api/v1/stations").param("limit", "2").param("after", "ZZP0").with(FORECASTER))
-                .andExpect(jsonPath("$.stations.length()").value(2)).andExpect(jsonPath("$.after").value("ZZP2"));
+                .andExpect(jsonPath("$.stations.length()").value(2)).andExpect(jsonPath("$.next").value("ZZP2"));
     }
 }
