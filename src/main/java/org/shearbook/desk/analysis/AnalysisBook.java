@@ -1,5 +1,6 @@
 package org.shearbook.desk.analysis;
 
+import jakarta.persistence.EntityManager;
 import java.util.ArrayList;
 import java.util.Collection;
 import java.util.HashMap;
@@ -43,12 +44,14 @@ public class AnalysisBook {
 
     private final AnalysisRepository analyses;
     private final SoundingArchive soundings;
+    private final EntityManager entityManager;
     private final AuditTrail audit;
     private final ApplicationEventPublisher events;
 
-    AnalysisBook(AnalysisRepository analyses, SoundingArchive soundings, AuditTrail audit, ApplicationEventPublisher events) {
+    AnalysisBook(AnalysisRepository analyses, SoundingArchive soundings, EntityManager entityManager, AuditTrail audit, ApplicationEventPublisher events) {
         this.analyses = analyses;
         this.soundings = soundings;
+        this.entityManager = entityManager;
         this.audit = audit;
         this.events = events;
     }
@@ -75,7 +78,11 @@ public class AnalysisBook {
         Analysis analysis = compute(sounding, defaultWindow());
         int version = analyses.newestVersion(kept.id().value()).orElse(0) + 1;
         String document = analysis.document() == null ? null : JSON.writeValueAsString(analysis.document().withLevels(List.of()));
-        AnalysisEntity entity = analyses.save(new AnalysisEntity(analysis.summary(), document, version, audit.recordingMoment()));
+        AnalysisEntity entity = new AnalysisEntity(analysis.summary(), document, version, audit.recordingMoment());
+        entityManager.persist(entity);
+        entityManager.flush();
+        // Of thousands of soundings in one act none need be compared again at the flushes for those after it.
+        entityManager.detach(entity);
         events.publishEvent(new AnalysisKept(kept.actor(), new Analysis(entity.toSummary(), analysis.document())));
     }
 

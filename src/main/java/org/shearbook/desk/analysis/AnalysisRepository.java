@@ -9,8 +9,6 @@ import org.springframework.data.repository.Repository;
 
 interface AnalysisRepository extends Repository<AnalysisEntity, Long> {
 
-    AnalysisEntity save(AnalysisEntity version);
-
     @Query("select max(a.version) from AnalysisEntity a where a.soundingId = :soundingId")
     Optional<Integer> newestVersion(long soundingId);
 

@@ -1,5 +1,6 @@
 package org.shearbook.desk.layer;
 
+import jakarta.persistence.EntityManager;
 import java.time.Duration;
 import java.time.Instant;
 import java.util.ArrayList;
@@ -37,13 +38,15 @@ public class LayerBook {
 
     private final LayerRepository layers;
     private final SoundingArchive soundings;
+    private final EntityManager entityManager;
     private final AuditTrail audit;
     private final ApplicationEventPublisher events;
     private final LayerSettings settings;
 
-    LayerBook(LayerRepository layers, SoundingArchive soundings, AuditTrail audit, ApplicationEventPublisher events, LayerSettings settings) {
+    LayerBook(LayerRepository layers, SoundingArchive soundings, EntityManager entityManager, AuditTrail audit, ApplicationEventPublisher events, LayerSettings settings) {
         this.layers = layers;
         this.soundings = soundings;
+        this.entityManager = entityManager;
         this.audit = audit;
         this.events = events;
         this.settings = settings;
@@ -63,7 +66,7 @@ public class LayerBook {
     @Transactional(propagation = Propagation.MANDATORY)
     void drop(SoundingWithdrawn withdrawn) {
         Instant recordedAt = audit.recordingMoment();
-        standing(withdrawn.id()).forEach(layer -> layers.save(new LayerEntity(layer, withdrawn.version(), recordedAt)));
+        keep(standing(withdrawn.id()).stream().map(layer -> new LayerEntity(layer, withdrawn.version(), recordedAt)).toList());
         events.publishEvent(new LayersProposed(withdrawn.actor(), withdrawn.id(), List.of()));
     }
 
@@ -73,15 +76,23 @@ public class LayerBook {
             return;
         }
         Instant recordedAt = audit.recordingMoment();
-        List<Layer> kept = new ArrayList<>();
+        List<LayerEntity> kept = new ArrayList<>();
         for (AnalysisDocument.Layer layer : found) {
             LayerEntity same = earlier.stream().filter(one -> overlap(one, layer) > 0).max(Comparator.comparingDouble(one -> overlap(one, layer))).orElse(null);
             earlier.remove(same);
             long id = same == null ? layers.drawId() : same.layerId;
-            kept.add(layers.save(new LayerEntity(id, same == null ? 1 : same.version + 1, sounding, analysis, layer, recordedAt)).toLayer());
+            kept.add(new LayerEntity(id, same == null ? 1 : same.version + 1, sounding, analysis, layer, recordedAt));
         }
-        earlier.forEach(gone -> layers.save(new LayerEntity(gone, analysis.soundingVersion(), recordedAt)));
-        events.publishEvent(new LayersProposed(actor, sounding.id(), kept));
+        keep(kept);
+        keep(earlier.stream().map(gone -> new LayerEntity(gone, analysis.soundingVersion(), recordedAt)).toList());
+        events.publishEvent(new LayersProposed(actor, sounding.id(), kept.stream().map(LayerEntity::toLayer).toList()));
+    }
+
+    /** Writes and lets go, so that of thousands of soundings in one act none is compared again with those after it. */
+    private void keep(List<LayerEntity> versions) {
+        versions.forEach(entityManager::persist);
+        entityManager.flush();
+        versions.forEach(entityManager::detach);
     }
 
     private static double overlap(LayerEntity one, AnalysisDocument.Layer other) {
@@ -89,7 +100,9 @@ public class LayerBook {
     }
 
     private List<LayerEntity> standing(SoundingId id) {
-        return layers.standingOf(List.of(id.value()), AsKnownAt.now().moment());
+        List<LayerEntity> found = layers.standingOf(List.of(id.value()), AsKnownAt.now().moment());
+        found.forEach(entityManager::detach);
+        return found;
     }
 
     /** The standing layers of a sounding, from the lowest up. */

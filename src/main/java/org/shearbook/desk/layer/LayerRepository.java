@@ -10,8 +10,6 @@ import org.springframework.data.repository.Repository;
 
 interface LayerRepository extends Repository<LayerEntity, Long> {
 
-    LayerEntity save(LayerEntity version);
-
     @Query(nativeQuery = true, value = "select nextval('layer_seq')")
     long drawId();
 

@@ -222,7 +222,10 @@ public class SoundingArchive {
 
     @Transactional(readOnly = true)
     public Optional<SoundingHeader> header(SoundingId id, AsKnownAt asKnownAt) {
-        return soundings.find(id.value(), asKnownAt.moment()).map(SoundingEntity::toHeader);
+        return soundings.find(id.value(), asKnownAt.moment()).map(entity -> {
+            entityManager.detach(entity);
+            return entity.toHeader();
+        });
     }
 
     /** Every version known at that moment, oldest first. */
@@ -338,8 +341,12 @@ public class SoundingArchive {
     }
 
     private Sounding withLevels(SoundingEntity entity) {
-        return levels.findById(entity.rowId).orElseThrow(() -> new IllegalStateException("Version %d of sounding %d has no levels"
-                .formatted(entity.version, entity.soundingId))).toSounding(entity.toHeader());
+        SoundingLevelsEntity ofEntity = levels.findById(entity.rowId).orElseThrow(() -> new IllegalStateException("Version %d of sounding %d has no levels"
+                .formatted(entity.version, entity.soundingId)));
+        // What a listener reads inside the act that keeps thousands must not stay in the session.
+        entityManager.detach(ofEntity);
+        entityManager.detach(entity);
+        return ofEntity.toSounding(entity.toHeader());
     }
 
     /** Soundings that were read, and what could not be. */
