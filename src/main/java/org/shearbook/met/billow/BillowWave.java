@@ -19,6 +19,9 @@ public record BillowWave(double wavelength, double growthRate, double azimuth, d
     /** Basis of a wave that was solved for. */
     public static final String SOLVED = "solved for this profile";
 
+    /** e-foldings needed before an instability shows: while fewer fit, shear passes before billows form. */
+    public static final double EFOLDINGS_NEEDED = 5;
+
     public BillowWave {
         if (!(wavelength > 0) || !(growthRate > 0) || Double.isInfinite(wavelength) || Double.isInfinite(growthRate)
                 || !Double.isFinite(azimuth) || !Double.isFinite(phaseSpeed)) {
@@ -52,6 +55,20 @@ public record BillowWave(double wavelength, double growthRate, double azimuth, d
     /** e-folding time 1/σ [s]. */
     public double eFoldingTime() {
         return 1 / growthRate;
+    }
+
+    /**
+     * Whether the wave has time to grow: {@code σ T > 5}. Source: Barad and Fringer 2010, J. Fluid Mech. 644, 61, for
+     * shear driven by internal waves.
+     *
+     * @param unstableFor T, how long the layer stays unstable [s], 0 or more
+     * @throws IllegalArgumentException if the time is negative or NaN
+     */
+    public boolean hasTimeToGrow(double unstableFor) {
+        if (!(unstableFor >= 0)) {
+            throw new IllegalArgumentException("the time a layer stays unstable must be 0 or more, not " + unstableFor + " s");
+        }
+        return growthRate * unstableFor > EFOLDINGS_NEEDED;
     }
 
     /**

@@ -203,4 +203,12 @@ class BillowEstimateTests {
         assertEquals(CloudPossibility.Answer.NO_CLOUD, CloudPossibility.of(humid(290, 90), new HeightBand(1000, 1400), 600).answer());
         assertThrows(IllegalArgumentException.class, () -> CloudPossibility.of(dry, new HeightBand(1800, 2200), Double.NaN));
     }
+
+    @Test
+    void aWaveNeedsFiveEFoldingsToShow() {
+        // published: σ T above about 5, Barad and Fringer 2010, as summarised elsewhere
+        assertTrue(wave(1000, 0.002).hasTimeToGrow(2501));
+        assertFalse(wave(1000, 0.002).hasTimeToGrow(2499));
+        assertThrows(IllegalArgumentException.class, () -> wave(1000, 0.002).hasTimeToGrow(Double.NaN));
+    }
 }
