@@ -54,7 +54,9 @@ public final class RoundedCornerFunction {
     private final double[] knotHeights;
     private final double[] values;
     private final double[] cornerWidths;
+    private final double[] inverseWidths;
     private final double[] slopes;
+    private final double[] changes;
     private final double[] turnedAbove;
     private final double[] begunAbove;
 
@@ -89,11 +91,19 @@ public final class RoundedCornerFunction {
         this.knotHeights = knotHeights.clone();
         this.values = values.clone();
         this.cornerWidths = cornerWidths.clone();
+        inverseWidths = new double[n];
+        for (int j = 0; j < n; j++) {
+            inverseWidths[j] = 1 / cornerWidths[j];
+        }
         slopes = new double[n - 1];
+        changes = new double[n];
         turnedAbove = new double[n];
         begunAbove = new double[n];
         for (int j = 0; j < n - 1; j++) {
             slopes[j] = (values[j + 1] - values[j]) / (knotHeights[j + 1] - knotHeights[j]);
+        }
+        for (int j = 1; j < n - 1; j++) {
+            changes[j] = slopes[j] - slopes[j - 1];
         }
         turnedAbove[0] = Double.NEGATIVE_INFINITY;
         for (int j = 1; j < n - 1; j++) {
@@ -245,10 +255,10 @@ public final class RoundedCornerFunction {
             at[k] = 0;
         }
         for (int j = turned; j < begun; j++) {
-            double change = slopes[j] - slopes[j - 1];
+            double change = changes[j];
             double distance = z - knotHeights[j];
-            double width = cornerWidths[j];
-            double q = distance / width;
+            double inverse = inverseWidths[j];
+            double q = distance * inverse;
             if (change == 0 || q <= -REACH) {
                 continue;
             }
@@ -267,11 +277,11 @@ public final class RoundedCornerFunction {
                     * (1 - t * (node - t * (0.5 * (node2 - 1) - t * node * (node2 - 3) / 6)));
             double distribution = DISTRIBUTION[entry]
                     + DENSITY[entry] * t * (1 - t * (0.5 * node - t * ((node2 - 1) / 6 - t * node * (node2 - 3) / 24)));
-            at[0] += change * (distance * distribution + width * density);
+            at[0] += change * (distance * distribution + cornerWidths[j] * density);
             if (orders > 1) {
                 at[1] += change * distribution;
             }
-            double scale = change * density / width;
+            double scale = change * density * inverse;
             double hermite = 1;
             double lowerHermite = 0;
             for (int k = 2; k < orders; k++) {
@@ -280,7 +290,7 @@ public final class RoundedCornerFunction {
                 double next = -(q * hermite + (k - 2) * lowerHermite);
                 lowerHermite = hermite;
                 hermite = next;
-                scale /= width;
+                scale *= inverse;
             }
         }
     }

@@ -35,8 +35,11 @@ final class DispersionFunction {
      * does not depend on m. dD/dc comes from the differentiated recurrences. Newton's method acts on D itself: the jump
      * D/(a_m b_m) has a pole beside the root whenever the wave lives far from m.
      *
-     * Scale. y grows like exp(k z); both solutions carry a factor exp(-k h/2) a step, which leaves zeros and phase of D
-     * alone and keeps D within range while k (top - base) < 1200.
+     * Scale. Both solutions are rescaled by a real factor when they become large or small; its logarithm is kept beside
+     * D. Through a long quiet stretch towards an end (shear weak against stability, or wind nearly that of the end) each
+     * step is scaled by the 1/ρ(c) of its own level: for phase speeds close to the wind there, the solution otherwise
+     * turns through hundreds of radians, and a search would have to follow each of them. The factor is analytic in the
+     * upper half-plane and has no zero, so it moves no root and changes no count.
      *
      * Cost. Per evaluation about 30 flops and one division a level in loops that a compiler can vectorise (kept short
      * and separate on purpose: one long loop is not vectorised by the JDK 17 compiler), then two interleaved scalar
@@ -46,16 +49,25 @@ final class DispersionFunction {
     private static final double PATH_OFFSET = 0.3;
     private static final double TAPER_FRACTION = 0.25;
     private static final double LONGEST_TAPER = 8;
+    private static final double UNIFORM = 0.02;
+    private static final int LONG_STRETCH = 64;
+    private static final int BLOCK = 64;
+    private static final double LARGE = 1e60;
 
     private final int n;
     private final int match;
+    private final int lowerFirst;
+    private final int upperFirst;
     private final double spacing;
+    private final double twelfth;
     private final boolean lowerRigid;
     private final boolean upperRigid;
     private final double lowerWind;
     private final double upperWind;
     private final double lowerStability;
     private final double upperStability;
+    private final double[] axisWind;
+    private final double[] axisStability;
     private final double[] windRe;
     private final double[] windIm;
     private final double[] freeRe;
@@ -81,7 +93,6 @@ final class DispersionFunction {
     private final double lowestWind;
     private final double highestWind;
     private double wavenumber = Double.NaN;
-    private double step;
     private long evaluations;
 
     private double valueRe;
@@ -92,6 +103,23 @@ final class DispersionFunction {
     private double rootIm;
     private double lastStep;
 
+    private double logScale;
+    private double aPrevRe;
+    private double aPrevIm;
+    private double aNowRe;
+    private double aNowIm;
+    private double aPrevSlopeRe;
+    private double aPrevSlopeIm;
+    private double aSlopeRe;
+    private double aSlopeIm;
+    private double bPrevRe;
+    private double bPrevIm;
+    private double bNowRe;
+    private double bNowIm;
+    private double bPrevSlopeRe;
+    private double bPrevSlopeIm;
+    private double bSlopeRe;
+    private double bSlopeIm;
     private double closureRe;
     private double closureIm;
     private double closureSlopeRe;
@@ -143,7 +171,7 @@ final class DispersionFunction {
                 Math.min(TAPER_FRACTION * n, LONGEST_TAPER * cornerWidth / spacing));
         double low = Double.POSITIVE_INFINITY;
         double high = Double.NEGATIVE_INFINITY;
-        double twelfth = spacing * spacing / 12;
+        twelfth = spacing * spacing / 12;
         double[][] u = flow.eastward;
         double[][] v = flow.northward;
         double[][] s = flow.stability;
@@ -151,7 +179,7 @@ final class DispersionFunction {
             double wind = flow.wind(i, cosine, sine);
             low = Math.min(low, wind);
             high = Math.max(high, wind);
-            geometry(offset, i, twelfth);
+            geometry(offset, i);
             double e = offset[i];
             double e2 = e * e;
             double u2 = u[2][i] * cosine + v[2][i] * sine;
@@ -174,6 +202,30 @@ final class DispersionFunction {
         }
         lowestWind = low;
         highestWind = high;
+        // where the plain march begins: behind a rigid end, or behind a long quiet stretch
+        double near = UNIFORM * (high - low);
+        int first = 0;
+        while (!lowerRigid && first < match - 1 && quiet(flow, first, cosine, sine, lowerWind, near)) {
+            first++;
+        }
+        lowerFirst = lowerRigid ? 1 : first >= LONG_STRETCH ? first : 0;
+        first = n;
+        while (!upperRigid && first > match + 1 && quiet(flow, first, cosine, sine, upperWind, near)) {
+            first--;
+        }
+        upperFirst = upperRigid ? n - 1 : n - first >= LONG_STRETCH ? first : n;
+        axisWind = new double[n + 1];
+        axisStability = new double[n + 1];
+        for (int i = 0; i <= n; i++) {
+            axisWind[i] = flow.wind(i, cosine, sine);
+            axisStability[i] = Math.max(0, flow.stability[0][i]);
+        }
+    }
+
+    /** Whether the wind at a level is nearly that of the end, or its shear weak against stability. */
+    private static boolean quiet(SampledFlow flow, int i, double cosine, double sine, double endWind, double near) {
+        double shear = flow.eastward[1][i] * cosine + flow.northward[1][i] * sine;
+        return shear * shear < flow.stability[0][i] || Math.abs(flow.wind(i, cosine, sine) - endWind) < near;
     }
 
     private static double[] pathOffset(SampledFlow flow, double cosine, double sine, double length, double taper) {
@@ -190,7 +242,7 @@ final class DispersionFunction {
     }
 
     /** h²P/12 and 1 - h²S/12 at one level; all differences fourth order, the third derivative needs seven points. */
-    private void geometry(double[] e, int i, double twelfth) {
+    private void geometry(double[] e, int i) {
         double l3 = at(e, i - 3);
         double l2 = at(e, i - 2);
         double l1 = at(e, i - 1);
@@ -221,86 +273,156 @@ final class DispersionFunction {
         }
         wavenumber = k;
         double k2 = k * k;
-        step = Math.exp(-0.5 * k * spacing);
         for (int i = 0; i <= n; i++) {
             aRe[i] = freeRe[i] - k2 * pathRe[i];
             aIm[i] = freeIm[i] - k2 * pathIm[i];
         }
     }
 
-    /** Evaluates D(c); the result is in {@link #valueRe()} and {@link #valueIm()}. */
+    /** Evaluates D(c); the result is in {@link #valueRe()}, {@link #valueIm()} and {@link #logScale()}. */
     void evaluate(double speedRe, double speedIm) {
         evaluations++;
         coefficients(speedRe, speedIm);
+        startBelow(speedRe, speedIm);
+        startAbove(speedRe, speedIm);
+        logScale = 0;
         final double[] tRe = this.tRe;
         final double[] tIm = this.tIm;
-        final double r2 = step * step;
-        double aPrevRe;
-        double aPrevIm;
-        double aNowRe = 1;
-        double aNowIm = 0;
-        double bPrevRe;
-        double bPrevIm;
-        double bNowRe = 1;
-        double bNowIm = 0;
-        int i = 0;
-        int j = n;
-        if (lowerRigid) {
-            aPrevRe = 0;
-            aPrevIm = 0;
-            i = 1;
-        } else {
-            closure(speedRe, speedIm, lowerWind, lowerStability);
-            aPrevRe = closureRe / step;
-            aPrevIm = closureIm / step;
-        }
-        if (upperRigid) {
-            bPrevRe = 0;
-            bPrevIm = 0;
-            j = n - 1;
-        } else {
-            closure(speedRe, speedIm, upperWind, upperStability);
-            bPrevRe = closureRe / step;
-            bPrevIm = closureIm / step;
-        }
         final int m = match;
-        for (; i < m && j > m; i++, j--) {
-            double re = tRe[i] * aNowRe - tIm[i] * aNowIm - r2 * aPrevRe;
-            double im = tRe[i] * aNowIm + tIm[i] * aNowRe - r2 * aPrevIm;
-            aPrevRe = aNowRe;
-            aPrevIm = aNowIm;
-            aNowRe = re;
-            aNowIm = im;
-            re = tRe[j] * bNowRe - tIm[j] * bNowIm - r2 * bPrevRe;
-            im = tRe[j] * bNowIm + tIm[j] * bNowRe - r2 * bPrevIm;
-            bPrevRe = bNowRe;
-            bPrevIm = bNowIm;
-            bNowRe = re;
-            bNowIm = im;
+        int i = lowerFirst;
+        int j = upperFirst;
+        double aPrevRe = this.aPrevRe;
+        double aPrevIm = this.aPrevIm;
+        double aNowRe = this.aNowRe;
+        double aNowIm = this.aNowIm;
+        double bPrevRe = this.bPrevRe;
+        double bPrevIm = this.bPrevIm;
+        double bNowRe = this.bNowRe;
+        double bNowIm = this.bNowIm;
+        while (i < m || j > m) {
+            int steps = Math.min(BLOCK, Math.min(m - i, j - m));
+            if (steps > 0) {
+                for (int end = i + steps; i < end; i++, j--) {
+                    double re = tRe[i] * aNowRe - tIm[i] * aNowIm - aPrevRe;
+                    double im = tRe[i] * aNowIm + tIm[i] * aNowRe - aPrevIm;
+                    aPrevRe = aNowRe;
+                    aPrevIm = aNowIm;
+                    aNowRe = re;
+                    aNowIm = im;
+                    re = tRe[j] * bNowRe - tIm[j] * bNowIm - bPrevRe;
+                    im = tRe[j] * bNowIm + tIm[j] * bNowRe - bPrevIm;
+                    bPrevRe = bNowRe;
+                    bPrevIm = bNowIm;
+                    bNowRe = re;
+                    bNowIm = im;
+                }
+            } else if (i < m) {
+                for (int end = Math.min(m, i + BLOCK); i < end; i++) {
+                    double re = tRe[i] * aNowRe - tIm[i] * aNowIm - aPrevRe;
+                    double im = tRe[i] * aNowIm + tIm[i] * aNowRe - aPrevIm;
+                    aPrevRe = aNowRe;
+                    aPrevIm = aNowIm;
+                    aNowRe = re;
+                    aNowIm = im;
+                }
+            } else {
+                for (int end = Math.max(m, j - BLOCK); j > end; j--) {
+                    double re = tRe[j] * bNowRe - tIm[j] * bNowIm - bPrevRe;
+                    double im = tRe[j] * bNowIm + tIm[j] * bNowRe - bPrevIm;
+                    bPrevRe = bNowRe;
+                    bPrevIm = bNowIm;
+                    bNowRe = re;
+                    bNowIm = im;
+                }
+            }
+            double size = Math.abs(aNowRe) + Math.abs(aNowIm) + Math.abs(aPrevRe) + Math.abs(aPrevIm);
+            if (size > LARGE || size < 1 / LARGE) {
+                aPrevRe /= size;
+                aPrevIm /= size;
+                aNowRe /= size;
+                aNowIm /= size;
+                logScale += Math.log(size);
+            }
+            size = Math.abs(bNowRe) + Math.abs(bNowIm) + Math.abs(bPrevRe) + Math.abs(bPrevIm);
+            if (size > LARGE || size < 1 / LARGE) {
+                bPrevRe /= size;
+                bPrevIm /= size;
+                bNowRe /= size;
+                bNowIm /= size;
+                logScale += Math.log(size);
+            }
         }
-        for (; i < m; i++) {
-            double re = tRe[i] * aNowRe - tIm[i] * aNowIm - r2 * aPrevRe;
-            double im = tRe[i] * aNowIm + tIm[i] * aNowRe - r2 * aPrevIm;
-            aPrevRe = aNowRe;
-            aPrevIm = aNowIm;
-            aNowRe = re;
-            aNowIm = im;
-        }
-        for (; j > m; j--) {
-            double re = tRe[j] * bNowRe - tIm[j] * bNowIm - r2 * bPrevRe;
-            double im = tRe[j] * bNowIm + tIm[j] * bNowRe - r2 * bPrevIm;
-            bPrevRe = bNowRe;
-            bPrevIm = bNowIm;
-            bNowRe = re;
-            bNowIm = im;
-        }
-        double re = tRe[m] * bNowRe - tIm[m] * bNowIm - r2 * bPrevRe;
-        double im = tRe[m] * bNowIm + tIm[m] * bNowRe - r2 * bPrevIm;
-        valueRe = aNowRe * re - aNowIm * im - r2 * (aPrevRe * bNowRe - aPrevIm * bNowIm);
-        valueIm = aNowRe * im + aNowIm * re - r2 * (aPrevRe * bNowIm + aPrevIm * bNowRe);
+        double re = tRe[m] * bNowRe - tIm[m] * bNowIm - bPrevRe;
+        double im = tRe[m] * bNowIm + tIm[m] * bNowRe - bPrevIm;
+        valueRe = aNowRe * re - aNowIm * im - (aPrevRe * bNowRe - aPrevIm * bNowIm);
+        valueIm = aNowRe * im + aNowIm * re - (aPrevRe * bNowIm + aPrevIm * bNowRe);
     }
 
-    /** {@code step·t} at every level, in three loops short enough to be vectorised. */
+    /** First values of the solution from below, past the quiet stretch. */
+    private void startBelow(double speedRe, double speedIm) {
+        aPrevRe = 0;
+        aPrevIm = 0;
+        aNowRe = 1;
+        aNowIm = 0;
+        if (lowerRigid) {
+            return;
+        }
+        decay(speedRe, speedIm, lowerWind, lowerStability);
+        double qRe = closureRe;
+        double qIm = closureIm;
+        // a step scaled by the 1/ρ of its level: with slowly varying wind and stability both stay near 1
+        aPrevRe = 1;
+        for (int i = 0; i < lowerFirst; i++) {
+            double lastRe = qRe;
+            double lastIm = qIm;
+            decay(speedRe, speedIm, axisWind[i], axisStability[i]);
+            qRe = closureRe;
+            qIm = closureIm;
+            double sRe = tRe[i] * aNowRe - tIm[i] * aNowIm - (lastRe * aPrevRe - lastIm * aPrevIm);
+            double sIm = tRe[i] * aNowIm + tIm[i] * aNowRe - (lastRe * aPrevIm + lastIm * aPrevRe);
+            aPrevRe = aNowRe;
+            aPrevIm = aNowIm;
+            aNowRe = sRe * qRe - sIm * qIm;
+            aNowIm = sRe * qIm + sIm * qRe;
+        }
+        double re = aPrevRe * qRe - aPrevIm * qIm;
+        aPrevIm = aPrevRe * qIm + aPrevIm * qRe;
+        aPrevRe = re;
+    }
+
+    /** First values of the solution from above, past the quiet stretch. */
+    private void startAbove(double speedRe, double speedIm) {
+        bPrevRe = 0;
+        bPrevIm = 0;
+        bNowRe = 1;
+        bNowIm = 0;
+        if (upperRigid) {
+            return;
+        }
+        decay(speedRe, speedIm, upperWind, upperStability);
+        double qRe = closureRe;
+        double qIm = closureIm;
+        // a step scaled by the 1/ρ of its level: with slowly varying wind and stability both stay near 1
+        bPrevRe = 1;
+        for (int j = n; j > upperFirst; j--) {
+            double lastRe = qRe;
+            double lastIm = qIm;
+            decay(speedRe, speedIm, axisWind[j], axisStability[j]);
+            qRe = closureRe;
+            qIm = closureIm;
+            double sRe = tRe[j] * bNowRe - tIm[j] * bNowIm - (lastRe * bPrevRe - lastIm * bPrevIm);
+            double sIm = tRe[j] * bNowIm + tIm[j] * bNowRe - (lastRe * bPrevIm + lastIm * bPrevRe);
+            bPrevRe = bNowRe;
+            bPrevIm = bNowIm;
+            bNowRe = sRe * qRe - sIm * qIm;
+            bNowIm = sRe * qIm + sIm * qRe;
+        }
+        double re = bPrevRe * qRe - bPrevIm * qIm;
+        bPrevIm = bPrevRe * qIm + bPrevIm * qRe;
+        bPrevRe = re;
+    }
+
+    /** t at every level, in four loops short enough to be vectorised. */
     private void coefficients(double speedRe, double speedIm) {
         final int levels = n + 1;
         final double[] windRe = this.windRe;
@@ -333,11 +455,9 @@ final class DispersionFunction {
             fRe[i] += aRe[i] * numRe[i] - aIm[i] * numIm[i];
             fIm[i] += aRe[i] * numIm[i] + aIm[i] * numRe[i];
         }
-        final double twelve = 12 * step;
-        final double ten = 10 * step;
         for (int i = 0; i < levels; i++) {
-            double scale = twelve / (fRe[i] * fRe[i] + fIm[i] * fIm[i]);
-            tRe[i] = scale * (numRe[i] * fRe[i] + numIm[i] * fIm[i]) - ten;
+            double scale = 12 / (fRe[i] * fRe[i] + fIm[i] * fIm[i]);
+            tRe[i] = scale * (numRe[i] * fRe[i] + numIm[i] * fIm[i]) - 10;
             tIm[i] = scale * (numIm[i] * fRe[i] - numRe[i] * fIm[i]);
         }
     }
@@ -346,7 +466,7 @@ final class DispersionFunction {
     void evaluateWithSlope(double speedRe, double speedIm) {
         evaluations += 2;
         coefficients(speedRe, speedIm);
-        // -12 x (B x + 2 C) / F², with step folded in as for t
+        // -12 x (B x + 2 C) / F²
         for (int i = 0; i <= n; i++) {
             double x = windRe[i] - speedRe;
             double y = windIm[i] - speedIm;
@@ -358,7 +478,7 @@ final class DispersionFunction {
         for (int i = 0; i <= n; i++) {
             double squareRe = fRe[i] * fRe[i] - fIm[i] * fIm[i];
             double squareIm = 2 * fRe[i] * fIm[i];
-            double scale = -12 * step / (squareRe * squareRe + squareIm * squareIm);
+            double scale = -12 / (squareRe * squareRe + squareIm * squareIm);
             double re = dRe[i];
             double im = dIm[i];
             dRe[i] = scale * (re * squareRe + im * squareIm);
@@ -367,93 +487,179 @@ final class DispersionFunction {
         marchWithSlope(speedRe, speedIm);
     }
 
+    /**
+     * Both solutions with their derivatives by c. The factors by which a quiet stretch is scaled count as constants, which
+     * Newton's method may do: they multiply value and slope alike where the value vanishes.
+     */
     private void marchWithSlope(double speedRe, double speedIm) {
-        final double r2 = step * step;
+        final double[] tRe = this.tRe;
+        final double[] tIm = this.tIm;
+        final double[] dRe = this.dRe;
+        final double[] dIm = this.dIm;
         final int m = match;
-        double pRe = 0;
-        double pIm = 0;
-        double pdRe = 0;
-        double pdIm = 0;
-        double aRe = 1;
-        double aIm = 0;
-        double adRe = 0;
-        double adIm = 0;
-        int i = 0;
-        if (lowerRigid) {
-            i = 1;
-        } else {
-            closure(speedRe, speedIm, lowerWind, lowerStability);
-            pRe = closureRe / step;
-            pIm = closureIm / step;
-            pdRe = closureSlopeRe / step;
-            pdIm = closureSlopeIm / step;
-        }
-        double qRe = 0;
-        double qIm = 0;
-        double qdRe = 0;
-        double qdIm = 0;
-        double bRe = 1;
-        double bIm = 0;
-        double bdRe = 0;
-        double bdIm = 0;
-        int j = n;
-        if (upperRigid) {
-            j = n - 1;
-        } else {
-            closure(speedRe, speedIm, upperWind, upperStability);
-            qRe = closureRe / step;
-            qIm = closureIm / step;
-            qdRe = closureSlopeRe / step;
-            qdIm = closureSlopeIm / step;
-        }
+        startSlopeBelow(speedRe, speedIm);
+        startSlopeAbove(speedRe, speedIm);
+        double pRe = aPrevRe;
+        double pIm = aPrevIm;
+        double pdRe = aPrevSlopeRe;
+        double pdIm = aPrevSlopeIm;
+        double aRe = aNowRe;
+        double aIm = aNowIm;
+        double adRe = aSlopeRe;
+        double adIm = aSlopeIm;
+        double qRe = bPrevRe;
+        double qIm = bPrevIm;
+        double qdRe = bPrevSlopeRe;
+        double qdIm = bPrevSlopeIm;
+        double bRe = bNowRe;
+        double bIm = bNowIm;
+        double bdRe = bSlopeRe;
+        double bdIm = bSlopeIm;
+        int i = lowerFirst;
+        int j = upperFirst;
         while (i < m || j > m) {
-            if (i < m) {
-                double re = tRe[i] * aRe - tIm[i] * aIm - r2 * pRe;
-                double im = tRe[i] * aIm + tIm[i] * aRe - r2 * pIm;
-                double reD = tRe[i] * adRe - tIm[i] * adIm + (dRe[i] * aRe - dIm[i] * aIm) - r2 * pdRe;
-                double imD = tRe[i] * adIm + tIm[i] * adRe + (dRe[i] * aIm + dIm[i] * aRe) - r2 * pdIm;
-                pRe = aRe;
-                pIm = aIm;
-                pdRe = adRe;
-                pdIm = adIm;
-                aRe = re;
-                aIm = im;
-                adRe = reD;
-                adIm = imD;
-                i++;
+            int steps = Math.min(BLOCK, Math.max(m - i, j - m));
+            for (int step = 0; step < steps; step++) {
+                if (i < m) {
+                    double re = tRe[i] * aRe - tIm[i] * aIm - pRe;
+                    double im = tRe[i] * aIm + tIm[i] * aRe - pIm;
+                    double reD = tRe[i] * adRe - tIm[i] * adIm + (dRe[i] * aRe - dIm[i] * aIm) - pdRe;
+                    double imD = tRe[i] * adIm + tIm[i] * adRe + (dRe[i] * aIm + dIm[i] * aRe) - pdIm;
+                    pRe = aRe;
+                    pIm = aIm;
+                    pdRe = adRe;
+                    pdIm = adIm;
+                    aRe = re;
+                    aIm = im;
+                    adRe = reD;
+                    adIm = imD;
+                    i++;
+                }
+                if (j > m) {
+                    double re = tRe[j] * bRe - tIm[j] * bIm - qRe;
+                    double im = tRe[j] * bIm + tIm[j] * bRe - qIm;
+                    double reD = tRe[j] * bdRe - tIm[j] * bdIm + (dRe[j] * bRe - dIm[j] * bIm) - qdRe;
+                    double imD = tRe[j] * bdIm + tIm[j] * bdRe + (dRe[j] * bIm + dIm[j] * bRe) - qdIm;
+                    qRe = bRe;
+                    qIm = bIm;
+                    qdRe = bdRe;
+                    qdIm = bdIm;
+                    bRe = re;
+                    bIm = im;
+                    bdRe = reD;
+                    bdIm = imD;
+                    j--;
+                }
             }
-            if (j > m) {
-                double re = tRe[j] * bRe - tIm[j] * bIm - r2 * qRe;
-                double im = tRe[j] * bIm + tIm[j] * bRe - r2 * qIm;
-                double reD = tRe[j] * bdRe - tIm[j] * bdIm + (dRe[j] * bRe - dIm[j] * bIm) - r2 * qdRe;
-                double imD = tRe[j] * bdIm + tIm[j] * bdRe + (dRe[j] * bIm + dIm[j] * bRe) - r2 * qdIm;
-                qRe = bRe;
-                qIm = bIm;
-                qdRe = bdRe;
-                qdIm = bdIm;
-                bRe = re;
-                bIm = im;
-                bdRe = reD;
-                bdIm = imD;
-                j--;
+            double size = Math.abs(aRe) + Math.abs(aIm) + Math.abs(pRe) + Math.abs(pIm);
+            if (size > LARGE || size < 1 / LARGE) {
+                double scale = 1 / size;
+                pRe *= scale;
+                pIm *= scale;
+                pdRe *= scale;
+                pdIm *= scale;
+                aRe *= scale;
+                aIm *= scale;
+                adRe *= scale;
+                adIm *= scale;
+            }
+            size = Math.abs(bRe) + Math.abs(bIm) + Math.abs(qRe) + Math.abs(qIm);
+            if (size > LARGE || size < 1 / LARGE) {
+                double scale = 1 / size;
+                qRe *= scale;
+                qIm *= scale;
+                qdRe *= scale;
+                qdIm *= scale;
+                bRe *= scale;
+                bIm *= scale;
+                bdRe *= scale;
+                bdIm *= scale;
             }
         }
         // one step more from above reaches the level below the matching one: D = a_m b_(m-1) - a_(m-1) b_m
-        double re = tRe[m] * bRe - tIm[m] * bIm - r2 * qRe;
-        double im = tRe[m] * bIm + tIm[m] * bRe - r2 * qIm;
-        double reD = tRe[m] * bdRe - tIm[m] * bdIm + (dRe[m] * bRe - dIm[m] * bIm) - r2 * qdRe;
-        double imD = tRe[m] * bdIm + tIm[m] * bdRe + (dRe[m] * bIm + dIm[m] * bRe) - r2 * qdIm;
-        valueRe = aRe * re - aIm * im - r2 * (pRe * bRe - pIm * bIm);
-        valueIm = aRe * im + aIm * re - r2 * (pRe * bIm + pIm * bRe);
-        slopeRe = adRe * re - adIm * im + aRe * reD - aIm * imD
-                - r2 * (pdRe * bRe - pdIm * bIm + pRe * bdRe - pIm * bdIm);
-        slopeIm = adRe * im + adIm * re + aRe * imD + aIm * reD
-                - r2 * (pdRe * bIm + pdIm * bRe + pRe * bdIm + pIm * bdRe);
+        double re = tRe[m] * bRe - tIm[m] * bIm - qRe;
+        double im = tRe[m] * bIm + tIm[m] * bRe - qIm;
+        double reD = tRe[m] * bdRe - tIm[m] * bdIm + (dRe[m] * bRe - dIm[m] * bIm) - qdRe;
+        double imD = tRe[m] * bdIm + tIm[m] * bdRe + (dRe[m] * bIm + dIm[m] * bRe) - qdIm;
+        valueRe = aRe * re - aIm * im - (pRe * bRe - pIm * bIm);
+        valueIm = aRe * im + aIm * re - (pRe * bIm + pIm * bRe);
+        slopeRe = adRe * re - adIm * im + aRe * reD - aIm * imD - (pdRe * bRe - pdIm * bIm + pRe * bdRe - pIm * bdIm);
+        slopeIm = adRe * im + adIm * re + aRe * imD + aIm * reD - (pdRe * bIm + pdIm * bRe + pRe * bdIm + pIm * bdRe);
     }
 
-    /** 1/ρ and its derivative by c for a uniform flow beyond an end. */
-    private void closure(double speedRe, double speedIm, double wind, double stability) {
-        double twelfth = spacing * spacing / 12;
+    private void startSlopeBelow(double speedRe, double speedIm) {
+        aPrevRe = 0;
+        aPrevIm = 0;
+        aNowRe = 1;
+        aNowIm = 0;
+        aPrevSlopeRe = 0;
+        aPrevSlopeIm = 0;
+        aSlopeRe = 0;
+        aSlopeIm = 0;
+        if (lowerRigid) {
+            return;
+        }
+        decay(speedRe, speedIm, lowerWind, lowerStability);
+        decaySlope(speedRe, speedIm, lowerWind, lowerStability);
+        aPrevRe = closureRe;
+        aPrevIm = closureIm;
+        aPrevSlopeRe = closureSlopeRe;
+        aPrevSlopeIm = closureSlopeIm;
+        for (int i = 0; i < lowerFirst; i++) {
+            decay(speedRe, speedIm, axisWind[i], axisStability[i]);
+            double re = tRe[i] * aNowRe - tIm[i] * aNowIm - aPrevRe;
+            double im = tRe[i] * aNowIm + tIm[i] * aNowRe - aPrevIm;
+            double reD = tRe[i] * aSlopeRe - tIm[i] * aSlopeIm + (dRe[i] * aNowRe - dIm[i] * aNowIm) - aPrevSlopeRe;
+            double imD = tRe[i] * aSlopeIm + tIm[i] * aSlopeRe + (dRe[i] * aNowIm + dIm[i] * aNowRe) - aPrevSlopeIm;
+            // by 1/ρ a step, values and slopes alike
+            aPrevRe = aNowRe * closureRe - aNowIm * closureIm;
+            aPrevIm = aNowRe * closureIm + aNowIm * closureRe;
+            aPrevSlopeRe = aSlopeRe * closureRe - aSlopeIm * closureIm;
+            aPrevSlopeIm = aSlopeRe * closureIm + aSlopeIm * closureRe;
+            aNowRe = re * closureRe - im * closureIm;
+            aNowIm = re * closureIm + im * closureRe;
+            aSlopeRe = reD * closureRe - imD * closureIm;
+            aSlopeIm = reD * closureIm + imD * closureRe;
+        }
+    }
+
+    private void startSlopeAbove(double speedRe, double speedIm) {
+        bPrevRe = 0;
+        bPrevIm = 0;
+        bNowRe = 1;
+        bNowIm = 0;
+        bPrevSlopeRe = 0;
+        bPrevSlopeIm = 0;
+        bSlopeRe = 0;
+        bSlopeIm = 0;
+        if (upperRigid) {
+            return;
+        }
+        decay(speedRe, speedIm, upperWind, upperStability);
+        decaySlope(speedRe, speedIm, upperWind, upperStability);
+        bPrevRe = closureRe;
+        bPrevIm = closureIm;
+        bPrevSlopeRe = closureSlopeRe;
+        bPrevSlopeIm = closureSlopeIm;
+        for (int j = n; j > upperFirst; j--) {
+            decay(speedRe, speedIm, axisWind[j], axisStability[j]);
+            double re = tRe[j] * bNowRe - tIm[j] * bNowIm - bPrevRe;
+            double im = tRe[j] * bNowIm + tIm[j] * bNowRe - bPrevIm;
+            double reD = tRe[j] * bSlopeRe - tIm[j] * bSlopeIm + (dRe[j] * bNowRe - dIm[j] * bNowIm) - bPrevSlopeRe;
+            double imD = tRe[j] * bSlopeIm + tIm[j] * bSlopeRe + (dRe[j] * bNowIm + dIm[j] * bNowRe) - bPrevSlopeIm;
+            bPrevRe = bNowRe * closureRe - bNowIm * closureIm;
+            bPrevIm = bNowRe * closureIm + bNowIm * closureRe;
+            bPrevSlopeRe = bSlopeRe * closureRe - bSlopeIm * closureIm;
+            bPrevSlopeIm = bSlopeRe * closureIm + bSlopeIm * closureRe;
+            bNowRe = re * closureRe - im * closureIm;
+            bNowIm = re * closureIm + im * closureRe;
+            bSlopeRe = reD * closureRe - imD * closureIm;
+            bSlopeIm = reD * closureIm + imD * closureRe;
+        }
+    }
+
+    /** 1/ρ of a uniform flow: t̂, then the larger root of ρ² - t̂ρ + 1 = 0. */
+    private void decay(double speedRe, double speedIm, double wind, double stability) {
         double a = 1 - twelfth * wavenumber * wavenumber;
         double c = twelfth * stability;
         double x = wind - speedRe;
@@ -462,17 +668,9 @@ final class DispersionFunction {
         double xxIm = 2 * x * y;
         double fRe = a * xxRe + c;
         double fIm = a * xxIm;
-        double inverse = 1 / (fRe * fRe + fIm * fIm);
-        double tRe = 12 * inverse * (xxRe * fRe + xxIm * fIm) - 10;
-        double tIm = 12 * inverse * (xxIm * fRe - xxRe * fIm);
-        double squareRe = (fRe * fRe - fIm * fIm) * inverse;
-        double squareIm = -2 * fRe * fIm * inverse;
-        double scale = -24 * c * inverse;
-        double tdRe = scale * (x * squareRe - y * squareIm);
-        double tdIm = scale * (x * squareIm + y * squareRe);
-
-        double halfRe = 0.5 * tRe;
-        double halfIm = 0.5 * tIm;
+        double scale = 6 / (fRe * fRe + fIm * fIm);
+        double halfRe = scale * (xxRe * fRe + xxIm * fIm) - 5;
+        double halfIm = scale * (xxIm * fRe - xxRe * fIm);
         double discriminantRe = halfRe * halfRe - halfIm * halfIm - 1;
         double discriminantIm = 2 * halfRe * halfIm;
         double modulus = Math.sqrt(discriminantRe * discriminantRe + discriminantIm * discriminantIm);
@@ -489,12 +687,30 @@ final class DispersionFunction {
         double size = 1 / (rhoRe * rhoRe + rhoIm * rhoIm);
         closureRe = rhoRe * size;
         closureIm = -rhoIm * size;
-        // d(1/ρ)/dc = t̂'/(1 - ρ²)
-        double eRe = 1 - (rhoRe * rhoRe - rhoIm * rhoIm);
-        double eIm = -2 * rhoRe * rhoIm;
-        double eSize = 1 / (eRe * eRe + eIm * eIm);
-        closureSlopeRe = (tdRe * eRe + tdIm * eIm) * eSize;
-        closureSlopeIm = (tdIm * eRe - tdRe * eIm) * eSize;
+    }
+
+    /** The derivative of 1/ρ by c, {@code t̂'/(1 - ρ²)}; needs {@link #decay} of the same flow before it. */
+    private void decaySlope(double speedRe, double speedIm, double wind, double stability) {
+        double a = 1 - twelfth * wavenumber * wavenumber;
+        double c = twelfth * stability;
+        double x = wind - speedRe;
+        double y = -speedIm;
+        double fRe = a * (x * x - y * y) + c;
+        double fIm = a * 2 * x * y;
+        double inverse = 1 / (fRe * fRe + fIm * fIm);
+        double squareRe = (fRe * fRe - fIm * fIm) * inverse;
+        double squareIm = -2 * fRe * fIm * inverse;
+        double scale = -24 * c * inverse;
+        double tdRe = scale * (x * squareRe - y * squareIm);
+        double tdIm = scale * (x * squareIm + y * squareRe);
+        // with q = 1/ρ: 1/(1 - ρ²) = q²/(q² - 1)
+        double q2Re = closureRe * closureRe - closureIm * closureIm;
+        double q2Im = 2 * closureRe * closureIm;
+        double eSize = 1 / ((q2Re - 1) * (q2Re - 1) + q2Im * q2Im);
+        double eRe = (q2Re * (q2Re - 1) + q2Im * q2Im) * eSize;
+        double eIm = -q2Im * eSize;
+        closureSlopeRe = tdRe * eRe - tdIm * eIm;
+        closureSlopeIm = tdRe * eIm + tdIm * eRe;
     }
 
     /**
@@ -543,6 +759,11 @@ final class DispersionFunction {
 
     double valueIm() {
         return valueIm;
+    }
+
+    /** D is the value times {@code exp(logScale)}, after {@link #evaluate}. */
+    double logScale() {
+        return logScale;
     }
 
     double slopeRe() {

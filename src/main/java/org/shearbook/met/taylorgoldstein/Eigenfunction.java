@@ -30,14 +30,14 @@ public final class Eigenfunction {
         this.extent = extent;
     }
 
-    static Eigenfunction of(StratifiedShearFlow flow, int intervals, Mode mode) {
+    static Eigenfunction of(StratifiedShearFlow flow, int intervals, double greatestShear, Mode mode) {
         double angle = Math.toRadians(90 - mode.azimuth());
         double cosine = Math.cos(angle);
         double sine = Math.sin(angle);
         double k = mode.horizontalWavenumber();
         double cRe = mode.phaseSpeed();
         double cIm = mode.growthRate() / k;
-        double wanted = cIm / (3 * flow.sampled(intervals, 2).greatestShear);
+        double wanted = cIm / (3 * greatestShear);
         int n = (int) Math.min(MOST_INTERVALS, Math.max(intervals, Math.ceil((flow.top() - flow.base()) / wanted)));
         SampledFlow sampled = flow.sampled(n, 3);
         double h = sampled.spacing;

@@ -12,13 +12,13 @@ final class ModeSearch {
     /*
      * 1 Azimuths along which ¼U′² - N² nowhere exceeds the square of the slowest growth looked for are skipped: Howard's
      *   bound leaves nothing to find there.
-     * 2 At every searchStride-th wavenumber, at the last one and at those named, all waves are counted and found
-     *   (UnstableRoots) in the rectangle
+     * 2 At the wavenumbers named for it all waves are counted and found (UnstableRoots), at every second azimuth at those
+     *   named for there. The rectangle is
      *     Re c: the wind's range over the heights of interest
      *     Im c: from max(σ_min/k, h N_max, ¼ h S_max) to min(half the wind's range, σ_Howard/k)
      *   The part h N_max of the floor keeps out the false zeros of the grid: f has zeros near c = U + 0.29 i h N. Below
      *   ¼ h S_max the critical level is thinner than the grid can tell.
-     * 3 In between, waves are followed by Newton's method from their neighbours in wavenumber.
+     * 3 In between, waves are followed by Newton's method from their neighbours in wavenumber and in azimuth.
      * 4 The fastest wave of the map is refined over wavenumber and azimuth, then re-solved at twice (if need be four
      *   times) the number of levels. One that the finer grid does not confirm is set aside and the next one is tried.
      *
@@ -26,10 +26,14 @@ final class ModeSearch {
      * does not depend on the length of the sounding.
      */
 
+    /** Wavenumber times spacing beyond which a wave has fewer than twelve levels to its length. */
+    static final double LARGEST_WAVENUMBER_STEP = 0.5;
+
     private static final double SHEAR_FLOOR = 0.25;
     private static final double FOLLOW_TOLERANCE = 1e-5;
     private static final double FINAL_TOLERANCE = 1e-10;
     private static final double GRID_TOLERANCE = 0.02;
+    private static final double[] NO_ROOTS = {};
     private static final int MOST_CANDIDATES = 4;
     private static final int MOST_CLIMBS = 20;
 
@@ -38,7 +42,7 @@ final class ModeSearch {
     private final double cornerWidth;
     private final double[] angles;
     private final double[] wavenumbers;
-    private final boolean[] searched;
+    private final boolean[][] searched;
     private final int rangeFrom;
     private final int rangeTo;
     private final double growthFloor;
@@ -47,6 +51,7 @@ final class ModeSearch {
     private final boolean refineAngle;
     private final boolean refineWavenumber;
 
+    private final boolean[] followable;
     private final double[][][] rootRe;
     private final double[][][] rootIm;
     private final double[][][] residual;
@@ -60,7 +65,7 @@ final class ModeSearch {
      * @param cornerWidth      finest corner width [m]
      * @param angles           azimuths as mathematical angles [rad], ascending
      * @param wavenumbers      [rad/m], ascending
-     * @param searched         at which of them all waves are searched
+     * @param searched         at which of them all waves are searched, along the azimuths of even and of odd index
      * @param rangeFrom        lowest grid level whose wind counts as a possible phase speed
      * @param rangeTo          highest such level
      * @param growthFloor      slowest growth looked for [s⁻¹]
@@ -69,14 +74,14 @@ final class ModeSearch {
      * @param refineWavenumber whether it may leave the given wavenumbers
      */
     ModeSearch(StratifiedShearFlow flow, SampledFlow sampled, double cornerWidth, double[] angles, double[] wavenumbers,
-            boolean[] searched, int rangeFrom, int rangeTo, double growthFloor, long workLimit, boolean refineAngle,
+            boolean[][] searched, int rangeFrom, int rangeTo, double growthFloor, long workLimit, boolean refineAngle,
             boolean refineWavenumber) {
         this.flow = flow;
         this.sampled = sampled;
         this.cornerWidth = cornerWidth;
         this.angles = angles;
         this.wavenumbers = wavenumbers;
-        this.searched = searched;
+        this.searched = new boolean[][] {searched[0].clone(), searched[1].clone()};
         this.rangeFrom = rangeFrom;
         this.rangeTo = rangeTo;
         this.growthFloor = growthFloor;
@@ -88,13 +93,44 @@ final class ModeSearch {
             greatest = Math.max(greatest, sampled.stability[0][i]);
         }
         gridFloor = sampled.spacing * Math.max(Math.sqrt(greatest), SHEAR_FLOOR * sampled.greatestShear);
-        rootRe = new double[angles.length][wavenumbers.length][0];
-        rootIm = new double[angles.length][wavenumbers.length][0];
-        residual = new double[angles.length][wavenumbers.length][0];
+        followable = new boolean[wavenumbers.length];
+        for (int q = 0; q < followable.length; q++) {
+            followable[q] = wavenumbers[q] * sampled.spacing <= LARGEST_WAVENUMBER_STEP;
+        }
+        rootRe = nothing(angles.length, wavenumbers.length);
+        rootIm = nothing(angles.length, wavenumbers.length);
+        residual = nothing(angles.length, wavenumbers.length);
     }
 
-    /** Fills the map. */
+    private static double[][][] nothing(int angles, int wavenumbers) {
+        double[][][] map = new double[angles][wavenumbers][];
+        for (double[][] along : map) {
+            Arrays.fill(along, NO_ROOTS);
+        }
+        return map;
+    }
+
+    /**
+     * Fills the map. Where the thin search finds nothing at all, a band one wavenumber wide may have slipped through, and
+     * every second wavenumber is searched.
+     */
     void run() {
+        sweep();
+        if (!exhausted && best(List.of()) == null) {
+            for (int q = 0; q < wavenumbers.length; q += 2) {
+                boolean again = followable[q] && !searched[0][q];
+                searched[0][q] = again;
+                searched[1][q] = false;
+                if (q + 1 < wavenumbers.length) {
+                    searched[0][q + 1] = false;
+                    searched[1][q + 1] = false;
+                }
+            }
+            sweep();
+        }
+    }
+
+    private void sweep() {
         for (int j = 0; j < angles.length && !exhausted; j++) {
             double cosine = Math.cos(angles[j]);
             double sine = Math.sin(angles[j]);
@@ -120,15 +156,19 @@ final class ModeSearch {
             right = Math.max(right, wind);
         }
         double radius = 0.5 * (dispersion.highestWind() - dispersion.lowestWind());
+        boolean[] here = searched[j % 2];
         UnstableRoots roots = new UnstableRoots(dispersion, evaluationLimit - evaluations);
         for (int q = 0; q < wavenumbers.length; q++) {
-            if (!searched[q]) {
+            if (!here[q]) {
                 continue;
             }
             double k = wavenumbers[q];
             roots.find(k, left, right, floor(k), Math.min(radius, bound / k) * 1.0001);
             missed += roots.missed();
             int count = roots.roots();
+            if (count == 0) {
+                continue;
+            }
             rootRe[j][q] = new double[count];
             rootIm[j][q] = new double[count];
             residual[j][q] = new double[count];
@@ -140,12 +180,15 @@ final class ModeSearch {
         }
         int below = -1;
         for (int q = 0; q < wavenumbers.length; q++) {
-            if (searched[q]) {
-                for (int between = below + 1; below >= 0 && between < q; between++) {
-                    follow(j, dispersion, below, between, q, left, right, Math.min(radius, bound / wavenumbers[between]));
+            if (here[q]) {
+                for (int between = below + 1; between < q; between++) {
+                    follow(j, dispersion, below, between, q, left, right, bound);
                 }
                 below = q;
             }
+        }
+        for (int between = below + 1; below >= 0 && between < wavenumbers.length; between++) {
+            follow(j, dispersion, below, between, -1, left, right, bound);
         }
     }
 
@@ -153,39 +196,51 @@ final class ModeSearch {
         return Math.max(growthFloor / k, gridFloor);
     }
 
-    /** Follows the waves of two searched wavenumbers to one between them. */
+    /**
+     * Follows waves to a wavenumber that is not searched: from the searched ones below and above it (index -1 where there
+     * is none) and from the same wavenumber at the azimuth before.
+     */
     private void follow(int j, DispersionFunction dispersion, int lower, int at, int upper, double left, double right,
-            double greatestIm) {
-        double[] lowerRe = rootRe[j][lower];
-        double[] lowerIm = rootIm[j][lower];
-        double[] upperRe = rootRe[j][upper];
-        double[] upperIm = rootIm[j][upper];
+            double bound) {
         double k = wavenumbers[at];
-        int wanted = Math.max(lowerRe.length, upperRe.length);
-        if (wanted == 0 || greatestIm <= floor(k)) {
+        if (!followable[at]) {
+            return;
+        }
+        double[] lowerRe = lower < 0 ? NO_ROOTS : rootRe[j][lower];
+        double[] lowerIm = lower < 0 ? NO_ROOTS : rootIm[j][lower];
+        double[] upperRe = upper < 0 ? NO_ROOTS : rootRe[j][upper];
+        double[] upperIm = upper < 0 ? NO_ROOTS : rootIm[j][upper];
+        double[] besideRe = j % 2 == 1 ? rootRe[j - 1][at] : NO_ROOTS;
+        double[] besideIm = j % 2 == 1 ? rootIm[j - 1][at] : NO_ROOTS;
+        int wanted = Math.max(besideRe.length, Math.max(lowerRe.length, upperRe.length));
+        double floor = floor(k);
+        if (wanted == 0 || Math.min(0.5 * (dispersion.highestWind() - dispersion.lowestWind()), bound / k) <= floor) {
             return;
         }
         if (dispersion.evaluations() + evaluations > evaluationLimit) {
             throw new EvaluationLimitReached();
         }
         dispersion.setWavenumber(k);
-        double weight = Math.log(k / wavenumbers[lower]) / Math.log(wavenumbers[upper] / wavenumbers[lower]);
-        double[] re = new double[lowerRe.length + upperRe.length];
+        double[] re = new double[lowerRe.length + upperRe.length + besideRe.length];
         double[] im = new double[re.length];
         double[] last = new double[re.length];
         int found = 0;
-        if (lowerRe.length == upperRe.length) {
-            for (int r = 0; r < wanted; r++) {
+        for (int r = 0; r < besideRe.length; r++) {
+            found = followed(dispersion, besideRe[r], besideIm[r], left, right, floor, re, im, last, found);
+        }
+        if (found < wanted && lower >= 0 && upper >= 0 && lowerRe.length == upperRe.length) {
+            double weight = Math.log(k / wavenumbers[lower]) / Math.log(wavenumbers[upper] / wavenumbers[lower]);
+            for (int r = 0; r < lowerRe.length && found < wanted; r++) {
                 int partner = nearest(lowerRe[r], lowerIm[r], upperRe, upperIm);
                 found = followed(dispersion, lowerRe[r] + weight * (upperRe[partner] - lowerRe[r]),
-                        lowerIm[r] + weight * (upperIm[partner] - lowerIm[r]), left, right, floor(k), re, im, last, found);
+                        lowerIm[r] + weight * (upperIm[partner] - lowerIm[r]), left, right, floor, re, im, last, found);
             }
         }
         for (int r = 0; r < lowerRe.length && found < wanted; r++) {
-            found = followed(dispersion, lowerRe[r], lowerIm[r], left, right, floor(k), re, im, last, found);
+            found = followed(dispersion, lowerRe[r], lowerIm[r], left, right, floor, re, im, last, found);
         }
         for (int r = 0; r < upperRe.length && found < wanted; r++) {
-            found = followed(dispersion, upperRe[r], upperIm[r], left, right, floor(k), re, im, last, found);
+            found = followed(dispersion, upperRe[r], upperIm[r], left, right, floor, re, im, last, found);
         }
         rootRe[j][at] = Arrays.copyOf(re, found);
         rootIm[j][at] = Arrays.copyOf(im, found);
@@ -399,64 +454,34 @@ final class ModeSearch {
     private Mode mode(Point point, double lastStep, double change, boolean converged, String reason) {
         double azimuth = azimuth(point.angle);
         Mode bare = new Mode(azimuth, point.wavenumber, point.growth(), point.speed,
-                criticalHeights(Math.cos(point.angle), Math.sin(point.angle), point.speed), lastStep, change, null,
+                sampled.criticalHeights(Math.cos(point.angle), Math.sin(point.angle), point.speed), lastStep, change, null,
                 converged, reason);
-        VerticalExtent extent = Eigenfunction.of(flow, sampled.intervals, bare).extent();
+        VerticalExtent extent = Eigenfunction.of(flow, sampled.intervals, sampled.greatestShear, bare).extent();
         return new Mode(azimuth, bare.horizontalWavenumber(), bare.growthRate(), bare.phaseSpeed(),
                 bare.criticalHeights(), lastStep, change, extent, converged, reason);
     }
 
     /** Degrees clockwise from north of a mathematical angle. */
     static double azimuth(double angle) {
-        double degrees = (90 - Math.toDegrees(angle)) % 360;
+        // to a billionth, so that a given azimuth comes back as it was given
+        double degrees = Math.rint((90 - Math.toDegrees(angle)) * 1e9) / 1e9 % 360;
         return degrees < 0 ? degrees + 360 : degrees;
     }
 
-    /** Heights where the wind equals the phase speed, the strongest shear first. */
-    private List<Double> criticalHeights(double cosine, double sine, double speed) {
-        List<double[]> crossings = new ArrayList<>();
-        for (int i = 0; i < sampled.intervals; i++) {
-            double from = sampled.wind(i, cosine, sine) - speed;
-            double to = sampled.wind(i + 1, cosine, sine) - speed;
-            if (from == 0 || from * to < 0) {
-                double shear = (to - from) / sampled.spacing;
-                crossings.add(new double[] {sampled.heights[i] - (to == from ? 0 : from / shear), Math.abs(shear)});
-            }
-        }
-        crossings.sort((a, b) -> Double.compare(b[1], a[1]));
-        return crossings.stream().map(crossing -> crossing[0]).toList();
-    }
-
-    /** Every wave of the map. */
-    List<Mode> modes() {
-        List<Mode> modes = new ArrayList<>();
-        for (int j = 0; j < angles.length; j++) {
-            double cosine = Math.cos(angles[j]);
-            double sine = Math.sin(angles[j]);
-            for (int q = 0; q < wavenumbers.length; q++) {
-                for (int r = 0; r < rootIm[j][q].length; r++) {
-                    modes.add(new Mode(azimuth(angles[j]), wavenumbers[q], wavenumbers[q] * rootIm[j][q][r],
-                            rootRe[j][q][r], criticalHeights(cosine, sine, rootRe[j][q][r]), residual[j][q][r],
-                            Double.NaN, null, true, ""));
-                }
-            }
-        }
-        return modes;
-    }
-
+    /** The map; ends the use of this search. */
     GrowthMap map() {
         double[] azimuths = new double[angles.length];
         double[][][] growth = new double[angles.length][wavenumbers.length][];
         for (int j = 0; j < angles.length; j++) {
             azimuths[j] = azimuth(angles[j]);
             for (int q = 0; q < wavenumbers.length; q++) {
-                growth[j][q] = rootIm[j][q].clone();
+                growth[j][q] = rootIm[j][q];
                 for (int r = 0; r < growth[j][q].length; r++) {
                     growth[j][q][r] *= wavenumbers[q];
                 }
             }
         }
-        return new GrowthMap(azimuths, wavenumbers.clone(), rootRe, growth);
+        return new GrowthMap(azimuths, wavenumbers.clone(), rootRe, growth, residual);
     }
 
     long evaluations() {

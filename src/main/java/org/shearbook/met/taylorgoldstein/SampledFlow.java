@@ -1,5 +1,8 @@
 package org.shearbook.met.taylorgoldstein;
 
+import java.util.ArrayList;
+import java.util.List;
+
 /** A flow on an even grid: {@code eastward[m][i]} is the m-th derivative of u at height i; likewise v and N². */
 final class SampledFlow {
 
@@ -50,5 +53,20 @@ final class SampledFlow {
             greatest = Math.max(greatest, 0.25 * shear * shear - Math.max(0, stability[0][i]));
         }
         return greatest;
+    }
+
+    /** Heights where the wind equals the phase speed, the strongest shear first. */
+    List<Double> criticalHeights(double cosine, double sine, double speed) {
+        List<double[]> crossings = new ArrayList<>();
+        for (int i = 0; i < intervals; i++) {
+            double from = wind(i, cosine, sine) - speed;
+            double to = wind(i + 1, cosine, sine) - speed;
+            if (from == 0 || from * to < 0) {
+                double shear = (to - from) / spacing;
+                crossings.add(new double[] {heights[i] - (to == from ? 0 : from / shear), Math.abs(shear)});
+            }
+        }
+        crossings.sort((a, b) -> Double.compare(b[1], a[1]));
+        return crossings.stream().map(crossing -> crossing[0]).toList();
     }
 }

@@ -5,11 +5,12 @@ package org.shearbook.met.taylorgoldstein;
  *
  * @param azimuths            directions over 180°, evenly spaced, one of them along the shear
  * @param wavenumbers         wavenumbers, evenly spaced in their logarithm
- * @param searchStride        every how many wavenumbers all waves are counted and found; in between they are followed
+ * @param searchStride        every how many wavenumbers all waves are counted and found, in a layer half as often at every
+ *                            second azimuth; in between they are followed. 1: everywhere
  * @param relativeGrowthFloor slowest growth looked for, as a fraction of the greatest shear
  * @param growthFloor         slowest growth looked for [s⁻¹]; the larger of the two floors counts
  * @param workLimit           evaluations of the dispersion function times grid levels after which a search stops and
- *                            says so; about 5 ns each
+ *                            says so; about 5 to 20 ns each
  */
 public record SearchSettings(int azimuths, int wavenumbers, int searchStride, double relativeGrowthFloor,
         double growthFloor, long workLimit) {
@@ -38,7 +39,7 @@ public record SearchSettings(int azimuths, int wavenumbers, int searchStride, do
 
     /** For a profile taken as given: 24 azimuths by 40 wavenumbers, growth above 0.2 % of the shear. */
     public static SearchSettings forLevels() {
-        return new SearchSettings(24, 40, 4, 0.002, 0, 1_000_000_000L);
+        return new SearchSettings(24, 40, 2, 0.002, 0, 300_000_000L);
     }
 
     private static void requirePositive(int value, String name) {

@@ -52,7 +52,6 @@ public final class StabilityAnalysis {
     private static final int MANY_LEVELS = 24;
     private static final int INTERPOLATION_PASSES = 4;
     private static final int MOST_MAP_POINTS = 20_000;
-    private static final double LARGEST_WAVENUMBER_STEP = 0.5;
 
     private final SearchSettings settings;
 
@@ -137,12 +136,14 @@ public final class StabilityAnalysis {
         MilesHoward theorem = MilesHoward.of(sampled);
         double shearAngle = shearAngle(eastward, northward, base, top);
         double[] angles = new double[settings.azimuths()];
+        // the shear itself at an even index, where the search is closest
+        int centre = angles.length / 4 * 2;
         for (int j = 0; j < angles.length; j++) {
-            angles[j] = shearAngle + Math.PI * (j - angles.length / 2) / angles.length;
+            angles[j] = shearAngle + Math.PI * (j - centre) / angles.length;
         }
         double[] wavenumbers = logarithmic(2 * Math.PI / (LONGEST_WAVE_IN_DEPTHS * depth),
                 2 * Math.PI / (SHORTEST_WAVE_IN_DEPTHS * Math.min(depth, 6 * finest)));
-        boolean[] searched = searched(wavenumbers, 2 * Math.PI / (EXPECTED_WAVE_IN_DEPTHS * depth));
+        boolean[][] searched = searched(wavenumbers, 2 * Math.PI / (EXPECTED_WAVE_IN_DEPTHS * depth));
         int rangeFrom = (int) Math.max(0, Math.floor((base - corner - from) / sampled.spacing));
         int rangeTo = (int) Math.min(intervals, Math.ceil((top + corner - from) / sampled.spacing));
         ModeSearch search = new ModeSearch(flow, sampled, finest, angles, wavenumbers, searched, rangeFrom, rangeTo,
@@ -175,8 +176,9 @@ public final class StabilityAnalysis {
      * lines between levels stay straight), and corner values are set so that the rounded profile goes through the
      * levels. The grid has 800 steps if they do justice to the levels, at most 2400; a profile with finer detail is
      * smoothed to what that grid resolves, and a remark says so. Without azimuths the search covers 180° around the strongest shear; without wavenumbers
-     * it covers what the depths of the regions with Ri &lt; ¼ suggest. All waves are counted at every azimuth and
-     * wavenumber. The fastest wave is refined to the maximum over whatever was searched.
+     * it covers what the depths of the regions with Ri &lt; ¼ suggest. Phase speeds are sought among the winds of those
+     * regions and a quarter of their depth beyond. All waves are counted at every azimuth and at every wavenumber given, or every
+     * searchStride-th of those searched. The fastest wave is refined to the maximum over whatever was searched.
      *
      * <p><b>Limits.</b> N² below zero at less than half of the levels is taken as zero, with a remark; otherwise the
      * flow is convective and no wave is given. A wavelength shorter than twelve grid steps is not solved for.
@@ -250,18 +252,21 @@ public final class StabilityAnalysis {
                             + " there is convection, which this analysis does not cover"
                     : "N² is negative at " + negative + " of " + n2.length + " levels and was taken as zero there");
         }
+        SubcriticalRegions regions = SubcriticalRegions.of(sampled);
         double[] angles = angles(sampled, azimuths);
-        double[] ks = wavenumbers.length > 0 ? wavenumbers.clone() : wavenumbersOf(sampled, finest);
+        double[] ks = wavenumbers.length > 0 ? wavenumbers.clone() : wavenumbersOf(regions, sampled, finest);
         Arrays.sort(ks);
         boolean[] searched = new boolean[ks.length];
         for (int q = 0; q < ks.length; q++) {
-            searched[q] = ks[q] * sampled.spacing <= LARGEST_WAVENUMBER_STEP;
-            if (!searched[q]) {
+            boolean resolved = ks[q] * sampled.spacing <= ModeSearch.LARGEST_WAVENUMBER_STEP;
+            searched[q] = resolved && (wavenumbers.length > 0 || q % settings.searchStride() == 0 || q == ks.length - 1);
+            if (!resolved) {
                 remarks.add(String.format(Locale.ROOT, "not converged: a wavelength of %.4g m is shorter than twelve"
                         + " steps of the grid (%.4g m each)", 2 * Math.PI / ks[q], sampled.spacing));
             }
         }
-        ModeSearch search = new ModeSearch(flow, sampled, finest, angles, ks, searched, 0, intervals,
+        ModeSearch search = new ModeSearch(flow, sampled, finest, angles, ks, new boolean[][] {searched, searched},
+                regions.from(), regions.to(),
                 growthFloor(sampled), settings.workLimit(), azimuths.length == 0, wavenumbers.length == 0);
         return result(flow, sampled, theorem, search, remarks, convective);
     }
@@ -292,8 +297,7 @@ public final class StabilityAnalysis {
             remarks.add(String.format(Locale.ROOT, "no wave grows faster than %.3g per second",
                     growthFloor(sampled)));
         }
-        return new StabilityResult(fastest, search.modes(), search.map(), theorem, complete, remarks,
-                search.evaluations(), flow, sampled.intervals);
+        return new StabilityResult(fastest, search.map(), theorem, complete, remarks, search.evaluations(), flow, sampled);
     }
 
     private double growthFloor(SampledFlow sampled) {
@@ -324,17 +328,21 @@ public final class StabilityAnalysis {
         return wavenumbers;
     }
 
-    private boolean[] searched(double[] wavenumbers, double expected) {
-        boolean[] searched = new boolean[wavenumbers.length];
+    /** Along azimuths of even index every stride-th wavenumber, along the others every second one of those. */
+    private boolean[][] searched(double[] wavenumbers, double expected) {
+        boolean[][] searched = new boolean[2][wavenumbers.length];
+        int stride = settings.searchStride();
         int nearest = 0;
         for (int q = 0; q < wavenumbers.length; q++) {
-            searched[q] = q % settings.searchStride() == 0 || q == wavenumbers.length - 1;
+            searched[0][q] = q % stride == 0 || q == wavenumbers.length - 1;
+            searched[1][q] = stride == 1 || q % (2 * stride) == stride;
             if (Math.abs(Math.log(wavenumbers[q] / expected)) < Math.abs(Math.log(wavenumbers[nearest] / expected))) {
                 nearest = q;
             }
         }
         // thin unstable bands lie near seven depths: never leave that wavenumber to its neighbours
-        searched[nearest] = true;
+        searched[0][nearest] = true;
+        searched[1][nearest] = true;
         return searched;
     }
 
@@ -357,58 +365,12 @@ public final class StabilityAnalysis {
         return angles;
     }
 
-    /**
-     * Wavenumbers worth searching: a region with Ri &lt; ¼ is as deep as its shear exceeds half its peak, or, where
-     * stability divides the shear, as deep as the region, but no less than a tenth of the former.
-     */
-    private double[] wavenumbersOf(SampledFlow flow, double finest) {
-        double shallowest = Double.POSITIVE_INFINITY;
-        double deepest = 0;
-        int first = -1;
-        int last = -1;
-        double weakest = 0.1 * flow.greatestShear;
-        for (int i = 0; i <= flow.intervals; i++) {
-            if (!subcritical(flow, i, weakest)) {
-                continue;
-            }
-            int end = i;
-            int peak = i;
-            while (end < flow.intervals && subcritical(flow, end + 1, weakest)) {
-                end++;
-                if (flow.shearSquared(end) > flow.shearSquared(peak)) {
-                    peak = end;
-                }
-            }
-            int low = peak;
-            int high = peak;
-            double quarter = 0.25 * flow.shearSquared(peak);
-            while (low > 0 && flow.shearSquared(low - 1) >= quarter) {
-                low--;
-            }
-            while (high < flow.intervals && flow.shearSquared(high + 1) >= quarter) {
-                high++;
-            }
-            double depth = (high - low + 1) * flow.spacing;
-            shallowest = Math.min(shallowest, Math.min(depth, Math.max((end - i + 1) * flow.spacing, 0.1 * depth)));
-            deepest = Math.max(deepest, depth);
-            first = first < 0 ? i : first;
-            last = end;
-            i = end;
-        }
-        double extent = flow.heights[flow.intervals] - flow.heights[0];
-        if (first < 0) {
-            shallowest = deepest = extent;
-            first = last = 0;
-        }
-        double longest = Math.max(20 * deepest, 4 * (last - first) * flow.spacing);
-        double shortest = Math.max(SHORTEST_WAVE_IN_DEPTHS * shallowest,
-                Math.max(3 * finest, 2 * Math.PI / LARGEST_WAVENUMBER_STEP * flow.spacing * 1.0001));
+    /** Wavenumbers worth searching for the depths of the regions that may drive growth. */
+    private double[] wavenumbersOf(SubcriticalRegions regions, SampledFlow flow, double finest) {
+        double longest = Math.max(20 * regions.deepest(), 4 * regions.extent());
+        double shortest = Math.max(SHORTEST_WAVE_IN_DEPTHS * regions.shallowest(), Math.max(3 * finest,
+                2 * Math.PI / ModeSearch.LARGEST_WAVENUMBER_STEP * flow.spacing * 1.0001));
         return logarithmic(2 * Math.PI / Math.max(longest, 2 * shortest), 2 * Math.PI / shortest);
-    }
-
-    private static boolean subcritical(SampledFlow flow, int i, double weakest) {
-        double s2 = flow.shearSquared(i);
-        return s2 > weakest * weakest && flow.stability[0][i] < 0.25 * s2;
     }
 
     private static double[] smoothedWidths(double[] height, double window, List<String> remarks) {

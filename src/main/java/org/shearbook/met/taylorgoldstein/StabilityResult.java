@@ -11,26 +11,24 @@ import org.jspecify.annotations.Nullable;
 public final class StabilityResult {
 
     private final @Nullable Mode fastest;
-    private final List<Mode> modes;
     private final GrowthMap map;
     private final MilesHoward milesHoward;
     private final boolean complete;
     private final List<String> remarks;
     private final long evaluations;
     private final StratifiedShearFlow flow;
-    private final int intervals;
+    private final SampledFlow sampled;
 
-    StabilityResult(@Nullable Mode fastest, List<Mode> modes, GrowthMap map, MilesHoward milesHoward, boolean complete,
-            List<String> remarks, long evaluations, StratifiedShearFlow flow, int intervals) {
+    StabilityResult(@Nullable Mode fastest, GrowthMap map, MilesHoward milesHoward, boolean complete,
+            List<String> remarks, long evaluations, StratifiedShearFlow flow, SampledFlow sampled) {
         this.fastest = fastest;
-        this.modes = List.copyOf(modes);
         this.map = map;
         this.milesHoward = milesHoward;
         this.complete = complete;
         this.remarks = List.copyOf(remarks);
         this.evaluations = evaluations;
         this.flow = flow;
-        this.intervals = intervals;
+        this.sampled = sampled;
     }
 
     /** The fastest-growing wave, re-solved on a finer grid; empty where none grows above the floor of the search. */
@@ -38,9 +36,9 @@ public final class StabilityResult {
         return Optional.ofNullable(fastest);
     }
 
-    /** Every growing wave of the map, by azimuth and wavenumber. */
+    /** Every growing wave of the map, by azimuth and wavenumber; made anew at each call. */
     public List<Mode> modes() {
-        return modes;
+        return map.modes(sampled);
     }
 
     /** Growth over azimuth and wavenumber. */
@@ -83,7 +81,7 @@ public final class StabilityResult {
 
     /** Grid intervals between base and top in the search. */
     public int intervals() {
-        return intervals;
+        return sampled.intervals;
     }
 
     /**
@@ -93,6 +91,6 @@ public final class StabilityResult {
      * @return vertical velocity amplitude and phase with height
      */
     public Eigenfunction eigenfunction(Mode mode) {
-        return Eigenfunction.of(flow, intervals, mode);
+        return Eigenfunction.of(flow, sampled.intervals, sampled.greatestShear, mode);
     }
 }

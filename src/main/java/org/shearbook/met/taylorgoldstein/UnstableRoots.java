@@ -30,6 +30,8 @@ final class UnstableRoots {
     private static final double MODULUS_DIFFERENCE = 1.2;
     private static final int DEEPEST = 14;
     private static final int FEWEST_PIECES = 8;
+    /** Right side one, upper side two, left side one. */
+    private static final int OTHER_PIECES = 4;
     private static final int MOST_PIECES = 1024;
     private static final double PIECE_IN_HEIGHTS = 4;
     private static final int MOST_CUTS = 9;
@@ -177,29 +179,28 @@ final class UnstableRoots {
         secondIm = 0;
         double startRe = evaluateRe(left, bottom);
         double startIm = dispersion.valueIm();
+        double startLog = dispersion.logScale();
         double fromRe = startRe;
         double fromIm = startIm;
-        double atRe = left;
-        for (int piece = 1; piece <= lowerSidePieces; piece++) {
-            double toRe = piece == lowerSidePieces ? right : left + (right - left) * piece / lowerSidePieces;
-            double re = evaluateRe(toRe, bottom);
-            double im = dispersion.valueIm();
-            walk(atRe, bottom, fromRe, fromIm, toRe, bottom, re, im, 0);
-            atRe = toRe;
-            fromRe = re;
-            fromIm = im;
+        double fromLog = startLog;
+        double fromX = left;
+        double fromY = bottom;
+        for (int piece = 1; piece <= lowerSidePieces + OTHER_PIECES; piece++) {
+            boolean last = piece == lowerSidePieces + OTHER_PIECES;
+            int beyond = piece - lowerSidePieces;
+            double toX = beyond < 0 ? left + (right - left) * piece / lowerSidePieces
+                    : beyond < 2 ? right : beyond == 2 ? 0.5 * (left + right) : left;
+            double toY = beyond < 1 || last ? bottom : top;
+            double toRe = last ? startRe : evaluateRe(toX, toY);
+            double toIm = last ? startIm : dispersion.valueIm();
+            double toLog = last ? startLog : dispersion.logScale();
+            walk(fromX, fromY, fromRe, fromIm, fromLog, toX, toY, toRe, toIm, toLog, 0);
+            fromX = toX;
+            fromY = toY;
+            fromRe = toRe;
+            fromIm = toIm;
+            fromLog = toLog;
         }
-        double rightRe = evaluateRe(right, top);
-        double rightIm = dispersion.valueIm();
-        walk(right, bottom, fromRe, fromIm, right, top, rightRe, rightIm, 0);
-        double middle = 0.5 * (left + right);
-        double middleRe = evaluateRe(middle, top);
-        double middleIm = dispersion.valueIm();
-        walk(right, top, rightRe, rightIm, middle, top, middleRe, middleIm, 0);
-        double leftRe = evaluateRe(left, top);
-        double leftIm = dispersion.valueIm();
-        walk(middle, top, middleRe, middleIm, left, top, leftRe, leftIm, 0);
-        walk(left, top, leftRe, leftIm, left, bottom, startRe, startIm, 0);
         // division by 2πi
         double first = firstRe;
         firstRe = firstIm / (2 * Math.PI);
@@ -223,12 +224,13 @@ final class UnstableRoots {
     }
 
     /** Adds the change of log D from one point of the border to the next. */
-    private void walk(double fromX, double fromY, double fromRe, double fromIm, double toX, double toY, double toRe,
-            double toIm, int depth) {
+    private void walk(double fromX, double fromY, double fromRe, double fromIm, double fromLog, double toX, double toY,
+            double toRe, double toIm, double toLog, int depth) {
         double x = 0.5 * (fromX + toX);
         double y = 0.5 * (fromY + toY);
         double re = evaluateRe(x, y);
         double im = dispersion.valueIm();
+        double log = dispersion.logScale();
         double quotientRe = re * fromRe + im * fromIm;
         double quotientIm = im * fromRe - re * fromIm;
         double phase1 = Math.atan2(quotientIm, quotientRe);
@@ -236,8 +238,8 @@ final class UnstableRoots {
         quotientIm = toIm * re - toRe * im;
         double phase2 = Math.atan2(quotientIm, quotientRe);
         double middle = re * re + im * im;
-        double modulus1 = 0.5 * Math.log(middle / (fromRe * fromRe + fromIm * fromIm));
-        double modulus2 = 0.5 * Math.log((toRe * toRe + toIm * toIm) / middle);
+        double modulus1 = 0.5 * Math.log(middle / (fromRe * fromRe + fromIm * fromIm)) + log - fromLog;
+        double modulus2 = 0.5 * Math.log((toRe * toRe + toIm * toIm) / middle) + toLog - log;
         boolean smooth = Math.abs(phase1) < PHASE_STEP && Math.abs(phase2) < PHASE_STEP
                 && Math.abs(phase1 - phase2) < PHASE_DIFFERENCE && Math.abs(modulus1) < MODULUS_STEP
                 && Math.abs(modulus2) < MODULUS_STEP && Math.abs(modulus1 - modulus2) < MODULUS_DIFFERENCE;
@@ -245,8 +247,8 @@ final class UnstableRoots {
             accumulate(fromX, fromY, x, y, modulus1, phase1);
             accumulate(x, y, toX, toY, modulus2, phase2);
         } else {
-            walk(fromX, fromY, fromRe, fromIm, x, y, re, im, depth + 1);
-            walk(x, y, re, im, toX, toY, toRe, toIm, depth + 1);
+            walk(fromX, fromY, fromRe, fromIm, fromLog, x, y, re, im, log, depth + 1);
+            walk(x, y, re, im, log, toX, toY, toRe, toIm, toLog, depth + 1);
         }
     }
 
