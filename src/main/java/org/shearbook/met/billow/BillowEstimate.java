@@ -3,6 +3,7 @@ package org.shearbook.met.billow;
 import java.util.Optional;
 import org.shearbook.met.richardson.ShearLayer;
 import org.shearbook.met.taylorgoldstein.Mode;
+import org.shearbook.met.taylorgoldstein.StabilityResult;
 
 /**
  * What the billows of a layer would become if they grow: size, time, and what they leave behind. Lengths [m], times [s].
@@ -64,6 +65,23 @@ public record BillowEstimate(
         }
         Optional<BillowWave> wave = fastest.filter(Mode::converged).map(BillowWave::of).or(() -> BillowWave.byRule(layer));
         return wave.map(w -> of(w, layer.windChange(), layer.maximumShear(), layer.minimum().richardsonNumber()));
+    }
+
+    /**
+     * Billows of a layer for which the stability problem was solved. As {@link #of(ShearLayer, Optional)}; where the
+     * solution has no growing wave the depth rule serves, and its basis says that solving found none.
+     *
+     * @param layer  a shear layer
+     * @param result of its stability analysis
+     * @return empty when neither gives a growing wave, or the wind does not change across the layer
+     */
+    public static Optional<BillowEstimate> of(ShearLayer layer, StabilityResult result) {
+        boolean solvedWithoutWave = result.complete() && result.fastest().isEmpty();
+        if (!solvedWithoutWave || !(layer.windChange() > 0)) {
+            return of(layer, result.fastest());
+        }
+        return BillowWave.byRule(layer, DepthRule.BASIS + "; solving found no growing wave")
+                .map(w -> of(w, layer.windChange(), layer.maximumShear(), layer.minimum().richardsonNumber()));
     }
 
     /**

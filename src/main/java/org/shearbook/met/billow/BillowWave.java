@@ -43,13 +43,17 @@ public record BillowWave(double wavelength, double growthRate, double azimuth, d
      * @return empty when the layer is stable by the rule
      */
     public static Optional<BillowWave> byRule(ShearLayer layer) {
+        return byRule(layer, DepthRule.BASIS);
+    }
+
+    static Optional<BillowWave> byRule(ShearLayer layer, String basis) {
         BillowScales scales = DepthRule.of(layer);
         if (scales.stable()) {
             return Optional.empty();
         }
         double along = layer.windChange();
         double carried = (layer.meanEastward() * layer.eastwardChange() + layer.meanNorthward() * layer.northwardChange()) / along;
-        return Optional.of(new BillowWave(scales.wavelength(), scales.growthRate(), layer.windChangeDirection(), carried, false, DepthRule.BASIS));
+        return Optional.of(new BillowWave(scales.wavelength(), scales.growthRate(), layer.windChangeDirection(), carried, false, basis));
     }
 
     /** e-folding time 1/σ [s]. */

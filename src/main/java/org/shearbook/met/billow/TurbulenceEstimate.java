@@ -49,7 +49,7 @@ public record TurbulenceEstimate(double low, double middle, double high, String 
         double least = Math.min(longest, meanDissipation(billows, billows.lowHeight(), 2 * time));
         double greatest = Math.max(shortest, meanDissipation(billows, billows.highHeight(), time));
         String basis = "Mean over the break-up of the billows to a peak within it, from the energy the wind loses when the layer mixes to a"
-                + " Richardson number of " + BillowEstimate.FINAL_RICHARDSON + "; billows " + billows.wave().basis()
+                + " Richardson number of " + BillowEstimate.FINAL_RICHARDSON + ". Wave: " + billows.wave().basis()
                 + ". Only if they grow and break; uncertain by a factor of two.";
         return new TurbulenceEstimate(rounded(Math.cbrt(least)), rounded(Math.cbrt(Math.sqrt(shortest * longest))),
                 rounded(Math.cbrt(PEAK_OVER_MEAN * greatest)), basis);

@@ -17,9 +17,14 @@ import org.shearbook.met.profile.MoistThermodynamics;
 import org.shearbook.met.profile.ThermodynamicLevel;
 import org.shearbook.met.profile.VerticalProfile;
 import org.shearbook.met.richardson.RichardsonAnalysis;
+import org.shearbook.met.richardson.RichardsonProfile;
 import org.shearbook.met.richardson.ShearLayer;
 import org.shearbook.met.taylorgoldstein.Mode;
+import org.shearbook.met.taylorgoldstein.SearchSettings;
+import org.shearbook.met.taylorgoldstein.StabilityAnalysis;
+import org.shearbook.met.taylorgoldstein.StabilityResult;
 import org.shearbook.testing.AnalyticShearFlows;
+import org.shearbook.testing.JetAscents;
 
 class BillowEstimateTests {
 
@@ -210,5 +215,24 @@ class BillowEstimateTests {
         assertTrue(wave(1000, 0.002).hasTimeToGrow(2501));
         assertFalse(wave(1000, 0.002).hasTimeToGrow(2499));
         assertThrows(IllegalArgumentException.class, () -> wave(1000, 0.002).hasTimeToGrow(Double.NaN));
+    }
+
+    @Test
+    void whereSolvingFindsNoWaveTheRuleSaysThatToo() {
+        // Tarquidd, day 3, at 200 m: Ri 0.23, so close to a quarter that no wave grows above the floor of the search
+        RichardsonProfile weak = RichardsonAnalysis.of(JetAscents.TARQUIDD_DAY_3_00.profile(), 200);
+        StabilityResult none = new StabilityAnalysis(SearchSettings.forLayers()).ofLayer(weak, weak.layers().get(0).extent());
+        assertTrue(none.complete() && none.fastest().isEmpty());
+        BillowEstimate byRule = BillowEstimate.of(weak.layers().get(0), none).orElseThrow();
+        assertFalse(byRule.wave().solved());
+        assertEquals("rule, not solved; solving found no growing wave", byRule.wave().basis());
+
+        RichardsonProfile strong = RichardsonAnalysis.of(JetAscents.KELBRITH_DAY_2_12.profile(), 100);
+        StabilityResult found = new StabilityAnalysis(SearchSettings.forLayers()).ofLayer(strong, strong.layers().get(0).extent());
+        BillowEstimate solved = BillowEstimate.of(strong.layers().get(0), found).orElseThrow();
+        assertTrue(solved.wave().solved());
+        // computed elsewhere for this ascent: 4.5 km, 8.6 min
+        assertEquals(4500, solved.crestSpacing(), 450);
+        assertEquals(8.6, solved.wave().eFoldingTime() / 60, 1.7);
     }
 }
