@@ -72,7 +72,7 @@ class AirReportController {
         List<AirReport> found = found(near, start, end, after, asKnownAt);
         List<AirReport> shown = found.size() > PAGE ? found.subList(0, PAGE) : found;
         model.addAttribute("rows", shown.stream().map(AirReportPage::of).toList());
-        model.addAttribute("from", from != null ? from : start.toString());
+        model.addAttribute("from", from != null ? from : start.toString().replace(":00Z", "Z"));
         model.addAttribute("until", until);
         model.addAttribute("stations", stations.all(asKnownAt));
         model.addAttribute("station", near == null ? station : near.station().id());

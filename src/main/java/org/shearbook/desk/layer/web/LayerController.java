@@ -74,7 +74,7 @@ class LayerController {
         model.addAttribute("ascents", ascents);
         model.addAttribute("history", rows(layers.newest(null, start, end, null, asKnownAt, MOST_SHOWN), now));
         model.addAttribute("most", MOST_SHOWN);
-        model.addAttribute("from", from != null ? from : start.toString());
+        model.addAttribute("from", from != null ? from : start.toString().replace(":00Z", "Z"));
         model.addAttribute("until", until);
         model.addAttribute("evidenceHours", layers.evidenceLasts().toHours());
         model.addAttribute("asKnownAt", asKnownAt.isNow() ? null : asKnownAt.moment());
@@ -84,7 +84,9 @@ class LayerController {
     private List<SoundingHeader> newestOfEachStation(Instant now, AsKnownAt asKnownAt) {
         Map<String, SoundingHeader> newest = new LinkedHashMap<>();
         for (SoundingHeader sounding : soundings.between(null, now.minus(LOOKS_BACK), now.plus(Duration.ofHours(1)), asKnownAt)) {
-            newest.put(sounding.stationId(), sounding);
+            // One ascent may have come in two formats: the finer one is shown.
+            newest.merge(sounding.stationId(), sounding, (before, after) ->
+                    after.observedAt().equals(before.observedAt()) && before.levelCount() > after.levelCount() ? before : after);
         }
         return newest.values().stream().sorted(Comparator.comparing(SoundingHeader::stationName)).toList();
     }

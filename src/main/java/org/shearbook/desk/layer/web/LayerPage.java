@@ -31,8 +31,9 @@ final class LayerPage {
     /** @param state now, which is unknown once the sounding is too old */
     record Row(Layer layer, StabilityState state) {
 
-        public String stateWord() {
-            return state == StabilityState.UNKNOWN && layer.state() != StabilityState.UNKNOWN ? "unknown, was " + layer.state().inWords() : state.inWords();
+        /** The state by the sounding, where it no longer holds; null where it does. */
+        public @Nullable String was() {
+            return state == layer.state() ? null : layer.state().inWords();
         }
     }
 }

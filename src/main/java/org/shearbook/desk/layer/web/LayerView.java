@@ -23,7 +23,7 @@ record LayerView(
                 layer.minRichardson(), layer.minRichardsonHeight(), layer.minRichardsonFlightLevel(), layer.bulkRichardson(), layer.window(),
                 layer.maximumShear(), layer.shear1000FtKt(), layer.windChange(), layer.shearDirection(), layer.meanWindFromDirection(), layer.meanWind(),
                 layer.saturated(), layer.state().inWords(),
-                new Rule(layer.ruleWavelength(), layer.ruleEFoldingTime() == null ? null : layer.ruleEFoldingTime() / 60, layer.ruleBasis()),
+                new Rule(layer.ruleWavelength(), layer.ruleEFoldingTime() == null ? null : Math.round(layer.ruleEFoldingTime() / 6) / 10.0, layer.ruleBasis()),
                 layer.latitude(), layer.longitude(), layer.remarkCodes(), layer.observedAt(), layer.receivedAt(), layer.recordedAt());
     }
 }
