@@ -32,7 +32,7 @@ public record BillowEstimate(
      * 61, 731; Smyth and Moum 2000, Phys. Fluids 12, 1327: from memory. The billow is as high as what it mixes.
      *
      * Time. Amplitude grows from a₀ to H/2 in ln(H/(2 a₀)) e-foldings, a₀ 1 to 5 m: our own choice, √5 m in the middle.
-     * Independent of it, laboratory billows reach full height and start to collapse at |ΔV| t/λ of about 5 (De Silva,
+     * Independent of it, laboratory billows reach full height and start to collapse at |ΔV| t/λ of about 5 (page from memory: De Silva,
      * Fernando, Eaton and Hebert 1996, Earth Planet. Sci. Lett. 143, 217). The range spans both.
      *
      * The patch stays turbulent for about as long again, 5 λ/|ΔV|: from memory, our own choice.

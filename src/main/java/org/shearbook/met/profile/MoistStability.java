@@ -47,7 +47,7 @@ public record MoistStability(
      * @param latentHeat            L [J kg⁻¹]
      * @return Γ_m [K m⁻¹], positive
      * @see <a href="https://doi.org/10.1175/1520-0469(1982)039%3C2152:OTEOMO%3E2.0.CO;2">Durran and Klemp (1982), J. Atmos.
-     *      Sci. 39, 2152–2158, eq. 19 and 36 as remembered</a>
+     *      Sci. 39, 2152–2158, eq. 36 as remembered</a>
      */
     public double moistLapseRate(double temperature, double saturationMixingRatio, double liquidWater, double latentHeat) {
         double rt = gasConstantDryAir * temperature;
