@@ -17,7 +17,7 @@ import org.junit.jupiter.api.Test;
 class DocumentationTests {
 
     private static final Pattern PATH = Pattern.compile("(?<![\\w/.])((?:src|frontend|db-migrations|demo-data)/[\\w./-]*\\w|LICENSE|README\\.md|DEVELOPERS\\.md)");
-    private static final Pattern TEST_CLASS = Pattern.compile("`?\\b([A-Z]\\w+(?:Tests|Benchmark))\\b");
+    private static final Pattern TEST_CLASS = Pattern.compile("(?<![\\w…$])([A-Z]\\w+(?:Tests|Benchmark))\\b");
 
     @Test
     void everyPathNamedInTheGuidesExists() throws IOException {
@@ -58,8 +58,10 @@ class DocumentationTests {
         try (Stream<Path> files = Files.walk(Path.of("src/main/resources/templates"))) {
             for (Path file : files.filter(path -> path.toString().endsWith(".html")).toList()) {
                 String page = Files.readString(file, StandardCharsets.UTF_8);
-                assertThat(page).as(file.toString()).startsWith("<!DOCTYPE html>")
-                        .doesNotContainPattern("<script(?![^>]*(src|type=\"application/json\"))").doesNotContainPattern("\\sstyle=\"").doesNotContainPattern("\\son[a-z]+=\"");
+                if (page.contains("frame :: page(")) {
+                    assertThat(page).as(file.toString()).startsWith("<!DOCTYPE html>");
+                }
+                assertThat(page).as(file.toString()).doesNotContainPattern("<script(?![^>]*(src|type=\"application/json\"))").doesNotContainPattern("\\sstyle=\"").doesNotContainPattern("\\son[a-z]+=\"");
             }
         }
     }
@@ -67,7 +69,7 @@ class DocumentationTests {
     @Test
     void aPageWithAScriptHasASheetOfTheSameName() throws IOException {
         try (Stream<Path> files = Files.walk(Path.of("src/main/resources/templates"))) {
-            for (Path file : files.filter(path -> path.toString().endsWith(".html")).toList()) {
+            for (Path file : files.filter(path -> path.toString().endsWith(".html") && !path.endsWith("frame.html")).toList()) {
                 Matcher named = Pattern.compile("frame :: page\\(.*,\\s*'([a-z/-]+)'\\s*\\)\\}").matcher(Files.readString(file, StandardCharsets.UTF_8));
                 if (named.find()) {
                     assertThat(Path.of("frontend", named.group(1) + ".js")).as(file.toString()).exists();
