@@ -12,8 +12,16 @@ interface AuditEntryRepository extends Repository<AuditEntryEntity, Long> {
     @Query("select e from AuditEntryEntity e order by e.sequence")
     Stream<AuditEntryEntity> streamAll();
 
-    @Query("select e from AuditEntryEntity e where e.recordedAt <= :moment and e.sequence < :before order by e.sequence desc")
-    List<AuditEntryEntity> newest(Instant moment, long before, Limit limit);
+    /** Empty texts ask for nothing in particular. */
+    @Query("""
+            select e from AuditEntryEntity e
+            where e.recordedAt <= :moment and e.sequence < :before and e.recordedAt >= :from and e.recordedAt <= :until
+              and (:actor = '' or e.actor = :actor) and (:kind = '' or e.subjectKind = :kind) and (:id = '' or e.subjectId = :id)
+            order by e.sequence desc""")
+    List<AuditEntryEntity> newest(Instant moment, long before, Instant from, Instant until, String actor, String kind, String id, Limit limit);
+
+    @Query("select distinct e.subjectKind from AuditEntryEntity e order by e.subjectKind")
+    List<String> kinds();
 
     @Query("select e from AuditEntryEntity e where e.subjectKind = :kind and e.subjectId = :id and e.recordedAt <= :moment order by e.sequence")
     List<AuditEntryEntity> ofSubject(String kind, String id, Instant moment);

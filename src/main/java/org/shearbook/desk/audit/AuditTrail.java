@@ -67,8 +67,43 @@ public class AuditTrail {
     /** The newest entries first; {@code before} is the sequence to go on from, or null for the newest of all. */
     @Transactional(readOnly = true)
     public List<AuditEntry> newest(AsKnownAt asKnownAt, @Nullable Long before, int limit) {
-        return entries.newest(asKnownAt.moment(), before == null ? Long.MAX_VALUE : before, Limit.of(limit))
-                .stream().map(AuditEntryEntity::toEntry).toList();
+        return newest(Wanted.EVERYTHING, asKnownAt, before, limit);
+    }
+
+    /** The newest of the entries asked for first; {@code before} is the sequence to go on from, or null for the newest of all. */
+    @Transactional(readOnly = true)
+    public List<AuditEntry> newest(Wanted wanted, AsKnownAt asKnownAt, @Nullable Long before, int limit) {
+        return entries.newest(asKnownAt.moment(), before == null ? Long.MAX_VALUE : before, wanted.from(), wanted.until(), wanted.actor(), wanted.kind(),
+                wanted.id(), Limit.of(limit)).stream().map(AuditEntryEntity::toEntry).toList();
+    }
+
+    /**
+     * Which entries are asked for.
+     *
+     * @param actor who acted; empty for everybody
+     * @param kind  noun of the subject; empty for all
+     * @param id    identifier of the subject; empty for all
+     */
+    public record Wanted(String actor, String kind, String id, Instant from, Instant until) {
+
+        public static final Wanted EVERYTHING = new Wanted("", "", "", Instant.EPOCH, AsKnownAt.now().moment());
+    }
+
+    /** The nouns that stand in the chain. */
+    @Transactional(readOnly = true)
+    public List<String> kinds() {
+        return entries.kinds();
+    }
+
+    /** The end of the chain, as it is printed under signed papers. */
+    @Transactional(readOnly = true)
+    public Head head() {
+        AuditChainEntity end = chains.findById(AuditChainEntity.ACTS).orElseThrow();
+        return new Head(end.lastSequence, end.lastHash);
+    }
+
+    /** @param entries how many acts are in the chain */
+    public record Head(long entries, String hash) {
     }
 
     /** Everything that was done to one thing, oldest first. */
