@@ -11,6 +11,9 @@ import org.shearbook.desk.airreport.AirReport;
 import org.shearbook.desk.airreport.AirReportArchive;
 import org.shearbook.desk.airreport.AirReportId;
 import org.shearbook.desk.audit.AsKnownAt;
+import org.shearbook.desk.layer.Layer;
+import org.shearbook.desk.layer.LayerBook;
+import org.shearbook.desk.layer.LayerId;
 import org.shearbook.desk.shell.Show;
 import org.springframework.stereotype.Component;
 
@@ -19,22 +22,27 @@ import org.springframework.stereotype.Component;
 public class EvidenceList {
 
     private static final Duration RECENT_REPORTS = Duration.ofHours(6);
+    private static final Duration RECENT_LAYERS = Duration.ofHours(12);
     private static final int MOST = 40;
 
+    private final LayerBook layers;
     private final AirReportArchive reports;
     private final Clock clock;
     private final Show show;
 
-    EvidenceList(AirReportArchive reports, Clock clock, Show show) {
+    EvidenceList(LayerBook layers, AirReportArchive reports, Clock clock, Show show) {
+        this.layers = layers;
         this.reports = reports;
         this.clock = clock;
         this.show = show;
     }
 
-    /** The newest first; smooth reports too, since they count as much. */
+    /** Layers, then reports, the newest first; smooth reports too, since they count as much. */
     public List<Evidence> recent() {
         Instant now = clock.instant();
         List<Evidence> recent = new ArrayList<>();
+        layers.between(now.minus(RECENT_LAYERS), now.plus(Duration.ofMinutes(5)), AsKnownAt.now()).stream()
+                .sorted(Comparator.comparing(Layer::observedAt).reversed()).limit(MOST).map(this::of).forEach(recent::add);
         reports.between(now.minus(RECENT_REPORTS), now.plus(Duration.ofMinutes(5)), AsKnownAt.now()).stream()
                 .filter(report -> report.worstIntensity() != null)
                 .sorted(Comparator.comparing(AirReport::observedAt).reversed()).limit(MOST).map(this::of).forEach(recent::add);
@@ -49,8 +57,15 @@ public class EvidenceList {
     private Optional<Evidence> find(Evidence.Kind kind, long id) {
         return switch (kind) {
             case AIR_REPORT -> reports.find(new AirReportId(id), AsKnownAt.now()).map(this::of);
-            case LAYER, SOUNDING -> Optional.empty();
+            case LAYER -> layers.find(new LayerId(id), AsKnownAt.now()).map(this::of);
+            case SOUNDING -> Optional.empty();
         };
+    }
+
+    Evidence of(Layer layer) {
+        return new Evidence(Evidence.Kind.LAYER, layer.id().value(), "%s %s layer %s, Ri %s%s (%.0f m window)".formatted(layer.stationName(),
+                show.utcWithDate(layer.observedAt()), layer.letter(), show.richardson(layer.minRichardson()),
+                layer.minRichardsonFlightLevel() == null ? "" : " at " + show.flightLevel(layer.minRichardsonFlightLevel()), layer.window()));
     }
 
     private Evidence of(AirReport report) {

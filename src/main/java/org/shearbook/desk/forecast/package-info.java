@@ -6,8 +6,10 @@
  * {@link org.shearbook.desk.forecast.ForecastDrafted} for work on a draft.
  * <b>Tables.</b> {@code forecast_version} and {@code forecast_evidence} for what was issued;
  * {@code forecast_draft} for what was only thought of, which an office forgets after a month.
+ *
+ * <p>Decode is among the allowed rooms because a report's place and intensity are of its types.
  */
-@ApplicationModule(displayName = "Shear-layer Forecasts", allowedDependencies = {"airreport", "station", "staff", "audit", "shell", "decode"})
+@ApplicationModule(displayName = "Shear-layer Forecasts", allowedDependencies = {"layer", "airreport", "station", "staff", "audit", "shell", "decode"})
 @NullMarked
 package org.shearbook.desk.forecast;
 

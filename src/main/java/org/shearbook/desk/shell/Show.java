@@ -66,6 +66,39 @@ public class Show {
         return moment == null ? MISSING : duration(Duration.between(moment, clock.instant())) + " ago (" + utc(moment) + ")";
     }
 
+    /** As {@link #ago(Instant)}, seen from another moment than now. */
+    public String ago(@Nullable Instant moment, Instant at) {
+        return moment == null ? MISSING : age(moment, at) + " ago (" + utc(moment) + ")";
+    }
+
+    /** How old something is at a moment; beside a column that shows the moment itself. */
+    public String age(@Nullable Instant moment, Instant at) {
+        return moment == null ? MISSING : duration(Duration.between(moment, at));
+    }
+
+    /** Time from a moment until another, or {@code ended}. */
+    public String left(@Nullable Instant until, Instant at) {
+        if (until == null) {
+            return MISSING;
+        }
+        return until.isAfter(at) ? duration(Duration.between(at, until)) + " left" : "ended";
+    }
+
+    /** The word for an intensity's abbreviation, which is also the name of its symbol: {@code severe}. */
+    public String intensity(@Nullable String abbreviation) {
+        if (abbreviation == null) {
+            return MISSING;
+        }
+        return switch (abbreviation) {
+            case "NIL" -> "nil";
+            case "LGT" -> "light";
+            case "MOD" -> "moderate";
+            case "SEV" -> "severe";
+            case "EXTRM" -> "extreme";
+            default -> abbreviation;
+        };
+    }
+
     /** Time from now until a moment, or {@code ended}. */
     public String left(@Nullable Instant until) {
         if (until == null) {

@@ -3,7 +3,6 @@ package org.shearbook.desk.forecast;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
-import java.time.Duration;
 import java.time.Instant;
 import java.util.List;
 import java.util.Map;
@@ -70,8 +69,8 @@ class ForecastBookRepositoryTests {
 
         @AfterEach
         void theClockGoesBack() {
-            vacate();
             clock.set(SettableClock.START);
+            vacate();
         }
 
         private void vacate() {
@@ -105,9 +104,7 @@ class ForecastBookRepositoryTests {
         @Test
         void anAmendedForecastKeepsItsEarlierVersion() {
             Forecast first = issued(ForecastSamples.moderate(clock.instant()));
-            clock.advance(Duration.ofMinutes(90));
             Forecast amended = forecasts.amend(B, first.id(), 1, ForecastSamples.severe(clock.instant(), "slf-c", null), "severe report at 1142Z");
-            clock.advance(Duration.ofMinutes(6));
             Forecast corrected = forecasts.correct(B, first.id(), 2, ForecastSamples.withLevels(amended.content(), 260, 310), "base was typed wrong");
             assertThat(forecasts.versions(first.id(), AsKnownAt.now())).containsExactly(first, amended, corrected);
             assertThat(List.of(first.state(), amended.state(), corrected.state()))

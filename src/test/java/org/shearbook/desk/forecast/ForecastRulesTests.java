@@ -24,7 +24,7 @@ class ForecastRulesTests {
     private static final Instant NINE = Instant.parse("2031-03-12T09:00:00Z");
 
     private final ForecastRules rules = new ForecastRules(
-            new ForecastSettings("Kelbrith desk", Duration.ofHours(4), Duration.ofHours(4), Duration.ofMinutes(30)));
+            new ForecastSettings("Kelbrith desk", Duration.ofHours(4), Duration.ofHours(4), Duration.ofMinutes(30), 60));
 
     @Test
     void aForecastByTheBookIsNotRefused() {

@@ -43,6 +43,11 @@ record DraftForm(@Nullable Long id, int seen, ForecastDraft.Purpose purpose, @Nu
         return field(name).equals(text);
     }
 
+    /** Where an untouched field's text came from; null when a person typed it. */
+    public @Nullable String mark(String name) {
+        return prefilled.get(name);
+    }
+
     /** What is wrong with a field; empty when nothing is. */
     public String wrong(String name) {
         return refusals.stream().filter(refusal -> refusal.field().equals(name)).map(Refusal::text).collect(Collectors.joining(" "));

@@ -24,6 +24,7 @@ import org.shearbook.desk.forecast.ForecastDraft.Purpose;
 import org.shearbook.desk.forecast.ForecastId;
 import org.shearbook.desk.forecast.ForecastRefused;
 import org.shearbook.desk.forecast.MayNotDraft;
+import org.shearbook.desk.forecast.LayerPrefill;
 import org.shearbook.desk.forecast.Movement;
 import org.shearbook.desk.forecast.Refusal;
 import org.shearbook.desk.forecast.StaleForecast;
@@ -50,17 +51,20 @@ import org.springframework.web.servlet.mvc.support.RedirectAttributes;
 class ForecastController {
 
     private static final int ENDED_PER_PAGE = 25;
+    private static final LayerPrefill.Filled NOTHING = new LayerPrefill.Filled(Map.of(), "");
 
     private final ForecastBook forecasts;
     private final EvidenceList evidence;
+    private final LayerPrefill prefill;
     private final DeskHoldingBook holdings;
     private final PersonBook people;
     private final CurrentActor actor;
     private final Clock clock;
 
-    ForecastController(ForecastBook forecasts, EvidenceList evidence, DeskHoldingBook holdings, PersonBook people, CurrentActor actor, Clock clock) {
+    ForecastController(ForecastBook forecasts, EvidenceList evidence, LayerPrefill prefill, DeskHoldingBook holdings, PersonBook people, CurrentActor actor, Clock clock) {
         this.forecasts = forecasts;
         this.evidence = evidence;
+        this.prefill = prefill;
         this.holdings = holdings;
         this.people = people;
         this.actor = actor;
@@ -81,19 +85,36 @@ class ForecastController {
     }
 
     @GetMapping("/forecasts/new")
-    String blank(Model model) {
-        return form(model, new DraftForm(null, 0, Purpose.NEW, null, "", Map.of(), Map.of(), List.of(), null, null, evidence.recent(), List.of(), null));
+    String blank(@RequestParam(required = false) @Nullable Long layer, Model model) {
+        LayerPrefill.Filled filled = layer == null ? NOTHING : prefill.of(layer).orElse(NOTHING);
+        model.addAttribute("layer", filled == NOTHING ? null : layer);
+        if (layer != null && filled == NOTHING) {
+            model.addAttribute("refused", "There is no layer %d; the form is empty.".formatted(layer));
+        }
+        Map<String, String> marks = new LinkedHashMap<>();
+        filled.fields().keySet().forEach(field -> marks.put(field, filled.from()));
+        return form(model, new DraftForm(null, 0, Purpose.NEW, null, "", filled.fields(), marks, List.of(), null, null, offered(filled.fields()),
+                Evidence.lines(filled.fields().getOrDefault(DraftFields.EVIDENCE, "")), null));
     }
 
     @PostMapping("/forecasts")
-    String begin(@RequestParam MultiValueMap<String, String> posted, @RequestParam(defaultValue = "save") String act, Model model, RedirectAttributes said) {
-        Map<String, String> fields = fields(posted, List.of());
+    String begin(@RequestParam MultiValueMap<String, String> posted, @RequestParam(defaultValue = "save") String act,
+            @RequestParam(required = false) @Nullable Long layer, Model model, RedirectAttributes said) {
+        LayerPrefill.Filled filled = layer == null ? NOTHING : prefill.of(layer).orElse(NOTHING);
+        Map<String, String> fields = fields(posted, Evidence.lines(filled.fields().getOrDefault(DraftFields.EVIDENCE, "")));
+        Map<String, String> untouched = new LinkedHashMap<>();
+        filled.fields().forEach((field, text) -> {
+            if (text.equals(fields.get(field))) {
+                untouched.put(field, filled.from());
+            }
+        });
         try {
-            ForecastDraft draft = forecasts.draft(actor.get(), fields, Map.of());
+            ForecastDraft draft = forecasts.draft(actor.get(), fields, untouched);
             return next(draft, act, said);
         } catch (ForecastRefused refused) {
-            return form(model, new DraftForm(null, 0, Purpose.NEW, null, "", fields, Map.of(), refused.refusals(), null, null,
-                    evidence.recent(), Evidence.lines(fields.getOrDefault(DraftFields.EVIDENCE, "")), null));
+            model.addAttribute("layer", layer);
+            return form(model, new DraftForm(null, 0, Purpose.NEW, null, "", fields, untouched, refused.refusals(), null, null,
+                    offered(fields), Evidence.lines(fields.getOrDefault(DraftFields.EVIDENCE, "")), null));
         }
     }
 
