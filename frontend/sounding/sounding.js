@@ -6,7 +6,7 @@ import { flightLevelText } from '../shared/lib/flight-level.js';
 import { TICKS } from '../shared/lib/quarter-scale.js';
 import { fixed, isNumber, msToKnots, probabilityText, richardsonText, shearText } from '../shared/lib/units.js';
 import { analysisOf, html, say, svg, text } from './drawing.js';
-import { axis, bandStretches, every, flightLevelMarks, onQuarterScale, pathOf, runs, scale, ticks } from './strips.js';
+import { axis, bandStretches, every, flightLevelMarks, measuredRuns, onQuarterScale, pathOf, runs, scale, ticks } from './strips.js';
 
 const WIDTH = 1100;
 const HEIGHT = 620;
@@ -89,15 +89,15 @@ function frame(title, x, width, { from, until, step }, label = value => String(v
 function temperatureStrip(levels, x, width, y) {
   const [group, place] = frame('temperature, dew point, °C', x, width, axis(levels.flatMap(l => [l.temperatureC, l.dewPointC])));
   group.append(
-    svg('path', { class: 'strip-line', d: pathOf(runs(levels.filter(l => isNumber(l.temperatureC)), l => l.temperatureC), place, y) }),
-    svg('path', { class: 'strip-line is-broken', d: pathOf(runs(levels.filter(l => isNumber(l.dewPointC)), l => l.dewPointC), place, y) }));
+    svg('path', { class: 'strip-line', d: pathOf(measuredRuns(levels, l => l.temperatureC, 'TEMPERATURE_GAP'), place, y) }),
+    svg('path', { class: 'strip-line is-broken', d: pathOf(measuredRuns(levels, l => l.dewPointC, 'TEMPERATURE_GAP'), place, y) }));
   return group;
 }
 
 function windStrip(levels, x, width, y) {
   const winds = levels.filter(l => isNumber(l.windSpeedMs));
   const [group, place] = frame('wind, kt', x, width, axis([0, ...winds.map(l => msToKnots(l.windSpeedMs))]));
-  group.append(svg('path', { class: 'strip-line', d: pathOf(runs(winds, l => msToKnots(l.windSpeedMs)), place, y) }));
+  group.append(svg('path', { class: 'strip-line', d: pathOf(measuredRuns(winds, l => msToKnots(l.windSpeedMs), 'WIND_GAP'), place, y) }));
   for (const level of every(winds, ARROWS_EVERY_M)) {
     // north is up; the arrow points where the wind blows to
     group.append(svg('path', { class: 'strip-arrow', d: 'M0 7V-7M-3 -3L0 -7L3 -3', transform: `translate(${x + width - 12} ${y(level.heightM)}) rotate(${(level.windFromDeg + 180) % 360})` }));

@@ -45,6 +45,22 @@ export function runs(points, value, height = point => point.heightM) {
   return found;
 }
 
+/**
+ * Runs through the points that have a value: levels reported for another quantity lie between them and break nothing,
+ * but between two levels that bound a gap nothing was measured.
+ */
+export function measuredRuns(points, value, gapFlag) {
+  const found = [];
+  let last = null;
+  for (const point of points.filter(p => isNumber(value(p)) && isNumber(p.heightM))) {
+    const gap = last !== null && last.flags?.includes(gapFlag) && point.flags?.includes(gapFlag);
+    if (last === null || gap) found.push([]);
+    found[found.length - 1].push([value(point), point.heightM]);
+    last = point;
+  }
+  return found;
+}
+
 /** The text of an SVG path through runs. A run of one point is a short dash, so that it is seen. */
 export function pathOf(lines, x, y) {
   return lines.map(line => (line.length === 1

@@ -1,6 +1,6 @@
 import { test } from 'node:test';
 import assert from 'node:assert/strict';
-import { axis, bandStretches, every, flightLevelMarks, pathOf, runs, scale, ticks } from './strips.js';
+import { axis, bandStretches, every, flightLevelMarks, measuredRuns, pathOf, runs, scale, ticks } from './strips.js';
 import { BANDS } from '../shared/lib/quarter-scale.js';
 
 test('flight levels lie where the sounding itself puts them', () => {
@@ -15,6 +15,12 @@ test('a missing value breaks the line', () => {
   assert.deepEqual(lines, [[[1, 0], [2, 10]], [[3, 30]]]);
   const identity = value => value;
   assert.equal(pathOf(lines, identity, identity), 'M1 0L2 10M2 30h2');
+});
+
+test('a line runs through levels of another quantity and stops at a marked gap', () => {
+  const levels = [{ heightM: 0, v: 1 }, { heightM: 5, v: null }, { heightM: 10, v: 2, flags: ['WIND_GAP'] }, { heightM: 90, v: 3, flags: ['WIND_GAP'] }, { heightM: 99, v: 4 }];
+  assert.deepEqual(measuredRuns(levels, l => l.v, 'WIND_GAP'), [[[1, 0], [2, 10]], [[3, 90], [4, 99]]]);
+  assert.deepEqual(measuredRuns(levels, l => l.v, 'TEMPERATURE_GAP').length, 1);
 });
 
 test('neighbouring points of one band are one stretch and what has no number is left open', () => {

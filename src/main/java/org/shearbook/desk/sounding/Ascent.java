@@ -134,11 +134,19 @@ final class Ascent {
 
     /** Whether the messages that came in change what the ascent says. */
     boolean makesNewVersion() {
-        if (added.isEmpty()) {
+        if (added.isEmpty() || isMuchThinner()) {
             return false;
         }
         content();
         return newest == null || newest.withdrawn || !newest.contentDigest.equals(digest);
+    }
+
+    /**
+     * Whether a whole file has less than half the levels of the version in use. A file cut off on its way must not
+     * push out the ascent; it is kept beside it.
+     */
+    boolean isMuchThinner() {
+        return !coded && !added.isEmpty() && newest != null && !newest.withdrawn && 2 * content().levels().size() < newest.levelCount;
     }
 
     String digest() {

@@ -118,6 +118,10 @@ public class SoundingArchive {
             ascent.checked().soundingFlags().forEach(flag -> remarks.add(new Remark(1, 0, flag.flag().name(), flag.text())));
             ascent.checked().refusal().ifPresent(refusal -> remarks.add(new Remark(1, 0, refusal.code(), refusal.text())));
         }
+        if (ascent.isMuchThinner()) {
+            remarks.add(new Remark(1, 0, "FEWER_LEVELS", "Version %d of sounding %d has %d levels, this has %d. It is kept beside that version and not used; was it cut off on its way?"
+                    .formatted(version, id, newest.levelCount, ascent.content().levels().size())));
+        }
         int number = ascent.messageCount() - ascent.added.size();
         for (int k = 0; k < ascent.added.size(); k++) {
             DecodedSounding message = ascent.added.get(k);
@@ -285,8 +289,13 @@ public class SoundingArchive {
         if (until.isEmpty()) {
             throw new UnknownSounding(id);
         }
-        SoundingMessageEntity last = until.get(until.size() - 1);
-        return last.parts.isEmpty() ? last.rawText() : until.stream().map(SoundingMessageEntity::rawText).collect(Collectors.joining("\n"));
+        if (!until.get(0).parts.isEmpty()) {
+            return until.stream().map(SoundingMessageEntity::rawText).collect(Collectors.joining("\n"));
+        }
+        // A file kept beside a version came later than the one the version was made from.
+        int made = until.stream().mapToInt(message -> message.version).max().orElseThrow();
+        Instant madeAt = until.stream().filter(message -> message.version == made).map(message -> message.recordedAt).min(Comparator.naturalOrder()).orElseThrow();
+        return until.stream().filter(message -> message.version == made && message.recordedAt.equals(madeAt)).reduce((earlier, later) -> later).orElseThrow().rawText();
     }
 
     /**

@@ -113,6 +113,18 @@ class SoundingArchiveRepositoryTests {
         }
 
         @Test
+        void aFileCutOffOnItsWayIsKeptBesideTheAscentAndDoesNotReplaceIt() {
+            Kept whole = keep(file("SACU", NOON, null, levels(12_000, 1))).get(0);
+            Kept cut = keep(file("SACU", NOON, null, levels(3_000, 1))).get(0);
+            assertThat(cut.id()).isEqualTo(whole.id());
+            assertThat(cut.version()).isEqualTo(1);
+            assertThat(cut.duplicate()).isFalse();
+            assertThat(cut.remarks()).extracting(Remark::code).contains("FEWER_LEVELS");
+            assertThat(newest(whole).levels()).hasSize(48);
+            assertThat(archive.raw(whole.id(), 1)).isEqualTo("file of SACU with 48 levels");
+        }
+
+        @Test
         void aPartThatArrivesLaterMakesANewVersionOfTheSameSounding() {
             Kept a = keep("TEMP", part("SAPA", NOON, "TTAA", "", standardLevels(1))).get(0);
             int standard = newest(a).levels().size();

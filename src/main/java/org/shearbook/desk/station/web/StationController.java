@@ -3,10 +3,12 @@ package org.shearbook.desk.station.web;
 import jakarta.servlet.http.HttpServletRequest;
 import java.io.IOException;
 import java.util.List;
+import java.util.Locale;
 import org.shearbook.desk.audit.AsKnownAt;
 import org.shearbook.desk.shell.MenuEntry;
 import org.shearbook.desk.staff.CurrentActor;
 import org.shearbook.desk.station.ListRefused;
+import org.shearbook.desk.station.Station;
 import org.shearbook.desk.station.StationBook;
 import org.springframework.context.annotation.Bean;
 import org.springframework.context.annotation.Configuration;
@@ -22,6 +24,8 @@ import org.springframework.web.servlet.mvc.support.RedirectAttributes;
 @Controller
 class StationController {
 
+    private static final int STATIONS_SHOWN = 200;
+
     private final StationBook book;
     private final CurrentActor actor;
 
@@ -31,8 +35,13 @@ class StationController {
     }
 
     @GetMapping("/stations")
-    String page(@RequestParam(defaultValue = "") String fix, AsKnownAt asKnownAt, HttpServletRequest request, Model model) {
-        model.addAttribute("stations", book.all(asKnownAt));
+    String page(@RequestParam(defaultValue = "") String fix, @RequestParam(defaultValue = "") String station, AsKnownAt asKnownAt, HttpServletRequest request, Model model) {
+        List<Station> all = book.all(asKnownAt);
+        String sought = station.strip().toUpperCase(Locale.ROOT);
+        model.addAttribute("stations", all.stream().filter(one -> sought.isEmpty() || one.name().toUpperCase(Locale.ROOT).contains(sought)
+                || one.identifiers().stream().anyMatch(identifier -> identifier.contains(sought))).limit(STATIONS_SHOWN).toList());
+        model.addAttribute("stationCount", all.size());
+        model.addAttribute("stationSought", station.strip());
         model.addAttribute("lists", book.fixLists(asKnownAt));
         model.addAttribute("sought", fix.strip());
         model.addAttribute("found", fix.isBlank() ? List.of() : book.fixes(fix, asKnownAt));
