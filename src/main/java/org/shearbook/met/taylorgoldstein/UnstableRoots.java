@@ -16,7 +16,7 @@ final class UnstableRoots {
      * different zeros inside as were counted, the rectangle is cut and each part is counted again.
      *
      * The change of log D is added up over pairs of neighbouring pieces. A pair is accepted when the phase of both turns
-     * by less than a radian, the two phase steps and the two steps of log |D| do not differ much, and no step of log |D|
+     * by less than 1.3 rad, the two phase steps and the two steps of log |D| do not differ much, and no step of log |D|
      * is large; otherwise both pieces are halved, at most DEEPEST times. Such a test sees only what its points come near
      * to: a zero a height y above the lower side turns the phase by 2π within a few y, and between wider points that
      * turn looks like none. The lower side therefore starts with points at most two of its own heights apart, so that
@@ -24,10 +24,10 @@ final class UnstableRoots {
      * something was passed over all the same; it is repeated with four times as many pieces.
      */
 
-    private static final double PHASE_STEP = 1.0;
-    private static final double PHASE_DIFFERENCE = 0.6;
-    private static final double MODULUS_STEP = 1.5;
-    private static final double MODULUS_DIFFERENCE = 1.2;
+    private static final double PHASE_STEP = 1.3;
+    private static final double PHASE_DIFFERENCE = 0.7;
+    private static final double MODULUS_STEP = 2.0;
+    private static final double MODULUS_DIFFERENCE = 1.4;
     private static final int DEEPEST = 14;
     private static final int FEWEST_PIECES = 8;
     /** Right side one, upper side two, left side one. */
