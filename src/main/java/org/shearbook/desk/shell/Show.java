@@ -41,6 +41,11 @@ public class Show {
         return isToday(moment) ? TIME.format(moment) : day(moment) + " " + TIME.format(moment);
     }
 
+    /** The time of day alone, beside a date that is written out: {@code 1142Z}. */
+    public String time(@Nullable Instant moment) {
+        return moment == null ? MISSING : TIME.format(moment);
+    }
+
     /** Always with the date: {@code 12 MAR 1142Z}. */
     public String utcWithDate(@Nullable Instant moment) {
         return moment == null ? MISSING : day(moment) + " " + TIME.format(moment);
