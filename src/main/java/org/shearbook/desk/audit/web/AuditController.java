@@ -24,6 +24,8 @@ import org.springframework.web.server.ResponseStatusException;
 class AuditController {
 
     private static final int PER_PAGE = 50;
+    /** Up to this many entries the chain is walked with every look at the page; a longer one is walked on demand. */
+    private static final long WALKED_ALONG = 20_000;
 
     private final AuditTrail audit;
     private final AuditReader reader;
@@ -48,7 +50,9 @@ class AuditController {
         model.addAttribute("older", entries.size() == PER_PAGE ? entries.get(entries.size() - 1).sequence() : null);
         model.addAttribute("all", all);
         model.addAttribute("kinds", audit.kinds());
-        model.addAttribute("head", audit.head());
+        AuditTrail.Head head = audit.head();
+        model.addAttribute("head", head);
+        model.addAttribute("integrity", all && before == null && head.entries() <= WALKED_ALONG ? audit.integrity() : null);
         model.addAttribute("unread", unread);
         model.addAttribute("actor", actor);
         model.addAttribute("kind", kind);
