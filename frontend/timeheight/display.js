@@ -27,7 +27,7 @@ import { paintField } from './field.js';
 import { legend } from './legend.js';
 import { readOutParts, spoken, valuesAt } from './read-out.js';
 import { clustered, steppedReport } from './reports.js';
-import { boxesAt, boxesOf, columnNotesOf, referencesOf, richardsonSegments } from './segments.js';
+import { boxesAt, boxesOf, columnNotesOf, referencesOf, richardsonSegments, stoodBoxes } from './segments.js';
 
 const WHOLE_HEIGHT = { low: 0, high: 450 };
 const UPPER_HEIGHT = { low: 200, high: 450 };
@@ -43,7 +43,7 @@ export async function mount(root) {
 export async function show(host) {
   const fallback = host.querySelector('[data-fallback]');
   if (typeof globalThis.Chart !== 'function') {
-    say(fallback, 'The chart library did not load, so there is no picture. The tables have the same numbers.');
+    say(fallback, "The chart library did not load, so there is no picture. The display's tables have the same numbers.");
     return;
   }
   let answer;
@@ -52,7 +52,7 @@ export async function show(host) {
     if (!response.ok) throw new Error(`the desk answered ${response.status}`);
     answer = await response.json();
   } catch (problem) {
-    say(fallback, `The picture could not be loaded (${problem.message}). The tables have the same numbers; reload to try again.`);
+    say(fallback, `The picture could not be loaded (${problem.message}). The display's tables have the same numbers; reload to try again.`);
     return;
   }
   fallback?.remove();
@@ -74,6 +74,7 @@ class TimeHeight {
     this.boxes = boxesOf(answer.boxes ?? [], epochMinute);
     this.reports = (answer.reports ?? []).map(report => ({ ...report, minute: epochMinute(report.observedAt) }));
     this.display = { ...answer, columns: this.columns, boxes: this.boxes, reports: this.reports };
+    this.stood = stoodBoxes(this.boxes).map(box => ({ ...box, from: box.stoodFrom, until: box.stoodUntil, superseded: false }));
     this.segments = richardsonSegments(this.columns);
     this.notes = columnNotesOf(this.columns, WHOLE_HEIGHT.high);
     this.references = referencesOf(this.columns);
@@ -104,7 +105,7 @@ class TimeHeight {
     const hidden = this.display.hiddenByDistance ?? 0;
     const unlevelled = this.display.withoutLevel ? `, ${this.display.withoutLevel} without a level` : '';
     this.observed = pane('observed', 'Observed',
-      `soundings, and reports within ${this.display.distanceNm} NM; ${hidden} hidden by distance${unlevelled}`);
+      `Ri at a ${this.display.windowM} m window; reports within ${this.display.distanceNm} NM; ${hidden} hidden by distance${unlevelled}`);
     this.forecast = pane('forecast', 'Forecast', 'shear-layer forecasts in force and their earlier versions');
     this.panes = [this.observed, this.forecast];
     this.frameOfPanes = make('div', { className: 'panes' }, this.observed.figure, this.forecast.figure);
@@ -161,7 +162,7 @@ class TimeHeight {
       columnNotes(() => this.notes, palette),
       referenceLines(() => this.references, palette),
       levelLines(() => this.segments, palette),
-      forecastBoxes(() => this.boxes.filter(box => !box.superseded && !box.cancelled), palette, () => true),
+      forecastBoxes(() => this.stood, palette, () => true),
       evidenceStrip(() => this.evidence, palette),
       reportMarks(chart => this.clusters(chart), palette),
       crossHair(cursor, palette),

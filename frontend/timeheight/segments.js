@@ -68,12 +68,17 @@ export function referencesOf(columns) {
   return lines;
 }
 
-/** Boxes with moments as epoch minutes and their words. */
+/**
+ * Boxes with moments as epoch minutes and their words. `stoodFrom` to `stoodUntil` is the part of its validity in
+ * which a version was the one in force: from when it was filed until it was replaced.
+ */
 export function boxesOf(boxes, epochMinute) {
   return boxes.map(box => ({
     ...box,
     from: epochMinute(box.validFrom),
     until: epochMinute(box.validUntil),
+    stoodFrom: Math.max(epochMinute(box.validFrom), epochMinute(box.filedAt)),
+    stoodUntil: box.replacedAt ? Math.min(epochMinute(box.validUntil), epochMinute(box.replacedAt)) : epochMinute(box.validUntil),
     base: box.baseFlightLevel,
     top: box.topFlightLevel,
     label: `${box.label ?? `SLF ${box.number}`}${box.version > 1 ? ` v${box.version}` : ''}`,
@@ -81,8 +86,10 @@ export function boxesOf(boxes, epochMinute) {
   }));
 }
 
-/** The boxes whose standing version covers a point; drafts, ghosts and cancelled ones do not count. */
+/** The versions that were in force at a moment and cover a level. */
 export function boxesAt(boxes, minute, level) {
-  return boxes.filter(box => !box.superseded && !box.cancelled
-    && minute >= box.from && minute <= box.until && level >= box.base && level <= box.top);
+  return stoodBoxes(boxes).filter(box => minute >= box.stoodFrom && minute <= box.stoodUntil && level >= box.base && level <= box.top);
 }
+
+/** The versions that were in force for a time at all: neither cancellations nor what was replaced before it began. */
+export const stoodBoxes = boxes => boxes.filter(box => !box.cancelled && box.stoodUntil > box.stoodFrom);

@@ -22,7 +22,16 @@ export function levelLines(source, palette) {
             ctx.beginPath();
             ctx.moveTo(from, height);
             ctx.lineTo(until, height);
-            strokeWithHalo(ctx, colours.text, colours.halo, segment.critical ? 2.5 : 1, segment.critical ? [] : [5, 4]);
+            if (segment.critical) {
+              strokeWithHalo(ctx, colours.text, colours.halo, 2.5);
+            } else {
+              // between the two bands it parts a plain line is seen, and noisy air has many of them
+              ctx.setLineDash([5, 4]);
+              ctx.strokeStyle = colours.text;
+              ctx.lineWidth = 1;
+              ctx.stroke();
+              ctx.setLineDash([]);
+            }
           };
           line(middle, end, colours.print ? 1 : 0.55);
           line(start, middle, 1);

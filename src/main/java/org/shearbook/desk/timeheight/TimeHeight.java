@@ -65,10 +65,12 @@ public record TimeHeight(
      *
      * @param label      {@code SLF 02}
      * @param superseded whether a newer version is known
+     * @param filedAt    when this version was filed
+     * @param replacedAt when the next version was filed, which ended this one; null for the newest
      * @param intensity  {@code MOD}, {@code MOD_OCNL_SEV} or {@code SEV}
      */
     public record Box(
-            long forecastId, int number, int version, String label, String state, boolean superseded, boolean cancelled, String intensity,
+            long forecastId, int number, int version, String label, String state, boolean superseded, boolean cancelled, Instant filedAt, @Nullable Instant replacedAt, String intensity,
             int probabilityPercent, Instant validFrom, Instant validUntil, int baseFlightLevel, int topFlightLevel) {
     }
 

@@ -154,7 +154,7 @@ public class TimeHeightDisplay {
         List<TimeHeight.Box> boxes = versions.values().stream().flatMap(all -> all.stream()
                 .filter(version -> version.content().validFrom().isBefore(time.until()) && version.content().validUntil().isAfter(time.from()))
                 .filter(version -> Area.mayOverlap(near, version.content().area()))
-                .map(version -> box(version, all.get(all.size() - 1).version()))).toList();
+                .map(version -> box(version, all))).toList();
 
         List<TimeHeight.Report> drawn = new ArrayList<>();
         int hidden = 0;
@@ -222,11 +222,12 @@ public class TimeHeightDisplay {
         return header.nominalAt() == null ? header.observedAt() : header.nominalAt();
     }
 
-    private static TimeHeight.Box box(Forecast forecast, int newest) {
+    private static TimeHeight.Box box(Forecast forecast, List<Forecast> versions) {
+        Instant replacedAt = versions.stream().filter(later -> later.version() == forecast.version() + 1).map(Forecast::recordedAt).findFirst().orElse(null);
         return new TimeHeight.Box(forecast.id().value(), forecast.number(), forecast.version(), forecast.name(), forecast.state().name(),
-                forecast.version() < newest, forecast.state() == Forecast.State.CANCELLED, forecast.content().intensity().name(),
-                forecast.content().probabilityPercent(), forecast.content().validFrom(), forecast.content().validUntil(),
-                forecast.content().baseFlightLevel(), forecast.content().topFlightLevel());
+                replacedAt != null, forecast.state() == Forecast.State.CANCELLED, forecast.recordedAt(), replacedAt,
+                forecast.content().intensity().name(), forecast.content().probabilityPercent(), forecast.content().validFrom(),
+                forecast.content().validUntil(), forecast.content().baseFlightLevel(), forecast.content().topFlightLevel());
     }
 
     private static TimeHeight.Report report(AirReport report, double level, double away, Station station, Iterable<List<Forecast>> versions) {

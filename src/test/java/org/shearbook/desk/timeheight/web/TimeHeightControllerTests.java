@@ -186,7 +186,7 @@ class TimeHeightControllerTests {
                 .andExpect(jsonPath("$.boxes[0].version").value(1)).andExpect(jsonPath("$.boxes[0].superseded").value(true))
                 .andExpect(jsonPath("$.boxes[0].intensity").value("MOD_OCNL_SEV")).andExpect(jsonPath("$.boxes[0].baseFlightLevel").value(270))
                 .andExpect(jsonPath("$.boxes[1].superseded").value(false)).andExpect(jsonPath("$.boxes[1].cancelled").value(false))
-                .andExpect(jsonPath("$.boxes[1].intensity").value("SEV")).andExpect(jsonPath("$.boxes[1].label").value(first.name()))
+                .andExpect(jsonPath("$.boxes[0].replacedAt").value(second.recordedAt().toString())).andExpect(jsonPath("$.boxes[1].intensity").value("SEV")).andExpect(jsonPath("$.boxes[1].label").value(first.name()))
                 .andExpect(jsonPath("$.reports[0].insideForecasts[0]").value(first.name()))
                 .andExpect(jsonPath("$.reports[1].insideForecasts[0]").value(first.name() + " v2"))
                 .andExpect(jsonPath("$.reports[2].insideForecasts", hasSize(0)));

@@ -1,0 +1,2 @@
+/* The Desk: its only script is the small time–height display. */
+export { mount } from '../timeheight/display.js';
