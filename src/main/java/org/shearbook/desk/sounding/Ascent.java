@@ -20,7 +20,8 @@ import org.shearbook.met.quality.SoundingQuality;
  * <p>Coded parts belong to one ascent when their moments lie within three hours of each other, because services code
  * the nominal hour or that of the release as they like; but the same part for another nominal hour is another ascent.
  * A whole file belongs to the ascent whose nominal hour is the same, or, where one says no nominal hour, that was
- * released within half an hour: special ascents can follow each other closely.
+ * released within half an hour: special ascents can follow each other closely. Where an ascent came both as coded
+ * parts and as a whole file, the one with more levels is in use; the other is kept beside it.
  */
 final class Ascent {
 
@@ -66,7 +67,7 @@ final class Ascent {
         for (SoundingMessageEntity message : earlier) {
             known.add(new KnownMessage(message.contentDigest, message.nominalAt, message.launchedAt, SoundingEntity.orNaN(message.latitudeDeg),
                     SoundingEntity.orNaN(message.longitudeDeg), SoundingEntity.orNaN(message.elevation)));
-            if (coded) {
+            if (coded && !message.parts.isEmpty()) {
                 parts.add(ofStation(message.toMessage(), site.stationId()));
             }
         }
@@ -134,7 +135,7 @@ final class Ascent {
 
     /** Whether the messages that came in change what the ascent says. */
     boolean makesNewVersion() {
-        if (added.isEmpty() || isMuchThinner()) {
+        if (added.isEmpty() || isMuchThinner() || isCoarserThanTheFile()) {
             return false;
         }
         content();
@@ -147,6 +148,11 @@ final class Ascent {
      */
     boolean isMuchThinner() {
         return !coded && !added.isEmpty() && newest != null && !newest.withdrawn && 2 * content().levels().size() < newest.levelCount;
+    }
+
+    /** Whether coded parts came after the whole file of the same ascent, which says more: they are kept beside it. */
+    boolean isCoarserThanTheFile() {
+        return coded && !added.isEmpty() && newest != null && !newest.withdrawn && newest.parts.isEmpty() && content().levels().size() < newest.levelCount;
     }
 
     String digest() {

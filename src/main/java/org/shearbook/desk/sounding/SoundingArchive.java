@@ -11,8 +11,10 @@ import java.util.List;
 import java.util.Map;
 import java.util.Objects;
 import java.util.Optional;
+import java.util.Set;
 import java.util.TreeMap;
 import java.util.stream.Collectors;
+import java.util.stream.Stream;
 import org.jspecify.annotations.Nullable;
 import org.shearbook.desk.audit.Actor;
 import org.shearbook.desk.audit.AsKnownAt;
@@ -122,6 +124,10 @@ public class SoundingArchive {
             remarks.add(new Remark(1, 0, "FEWER_LEVELS", "Version %d of sounding %d has %d levels, this has %d. It is kept beside that version and not used; was it cut off on its way?"
                     .formatted(version, id, newest.levelCount, ascent.content().levels().size())));
         }
+        if (ascent.isCoarserThanTheFile()) {
+            remarks.add(new Remark(1, 0, "COARSER_THAN_THE_FILE", "Version %d of sounding %d came as a whole file with %d levels. These parts are kept beside it."
+                    .formatted(version, id, newest.levelCount)));
+        }
         int number = ascent.messageCount() - ascent.added.size();
         for (int k = 0; k < ascent.added.size(); k++) {
             DecodedSounding message = ascent.added.get(k);
@@ -160,10 +166,21 @@ public class SoundingArchive {
 
     private @Nullable SoundingEntity stored(Site site, String format, boolean coded, DecodedSounding message) {
         Instant moment = Ascent.momentOf(message);
-        return soundings.near(site.stationId(), moment.minus(Ascent.HALF_WINDOW.multipliedBy(2)), moment.plus(Ascent.HALF_WINDOW.multipliedBy(2))).stream()
+        List<SoundingEntity> near = soundings.near(site.stationId(), moment.minus(Ascent.HALF_WINDOW.multipliedBy(2)), moment.plus(Ascent.HALF_WINDOW.multipliedBy(2)));
+        SoundingEntity sameForm = nearest(moment, near.stream()
                 .filter(one -> form(!one.parts.isEmpty(), one.sourceFormat).equals(form(coded, format)))
-                .filter(one -> Ascent.belongs(message, coded, one.nominalAt, one.launchedAt, SoundingEntity.partSet(one.parts)))
-                .min(Comparator.comparing(one -> Duration.between(one.observedAt, moment).abs())).orElse(null);
+                .filter(one -> Ascent.belongs(message, coded, one.nominalAt, one.launchedAt, SoundingEntity.partSet(one.parts))));
+        if (sameForm != null) {
+            return sameForm;
+        }
+        // The same ascent in the other form: a whole file after its coded parts, or parts after the file.
+        return nearest(moment, near.stream()
+                .filter(one -> one.parts.isEmpty() == coded && (coded || one.levelCount < message.levels().size()))
+                .filter(one -> Ascent.belongs(message, false, one.nominalAt, one.launchedAt, Set.of())));
+    }
+
+    private static @Nullable SoundingEntity nearest(Instant moment, Stream<SoundingEntity> stored) {
+        return stored.min(Comparator.comparing(one -> Duration.between(one.observedAt, moment).abs())).orElse(null);
     }
 
     private static String form(boolean coded, String format) {
@@ -289,13 +306,14 @@ public class SoundingArchive {
         if (until.isEmpty()) {
             throw new UnknownSounding(id);
         }
-        if (!until.get(0).parts.isEmpty()) {
+        List<SoundingMessageEntity> files = until.stream().filter(message -> message.parts.isEmpty()).toList();
+        if (files.isEmpty()) {
             return until.stream().map(SoundingMessageEntity::rawText).collect(Collectors.joining("\n"));
         }
         // A file kept beside a version came later than the one the version was made from.
-        int made = until.stream().mapToInt(message -> message.version).max().orElseThrow();
-        Instant madeAt = until.stream().filter(message -> message.version == made).map(message -> message.recordedAt).min(Comparator.naturalOrder()).orElseThrow();
-        return until.stream().filter(message -> message.version == made && message.recordedAt.equals(madeAt)).reduce((earlier, later) -> later).orElseThrow().rawText();
+        int made = files.stream().mapToInt(message -> message.version).max().orElseThrow();
+        Instant madeAt = files.stream().filter(message -> message.version == made).map(message -> message.recordedAt).min(Comparator.naturalOrder()).orElseThrow();
+        return files.stream().filter(message -> message.version == made && message.recordedAt.equals(madeAt)).reduce((earlier, later) -> later).orElseThrow().rawText();
     }
 
     /**

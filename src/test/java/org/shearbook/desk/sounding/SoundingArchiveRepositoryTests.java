@@ -145,6 +145,26 @@ class SoundingArchiveRepositoryTests {
         }
 
         @Test
+        void aWholeFileTakesThePlaceOfTheCodedPartsOfItsAscentAndLaterPartsAreKeptBesideIt() {
+            Kept coded = keep("TEMP", part("SAFO", NOON, "TTAA", "", standardLevels(1))).get(0);
+            Kept whole = keep(file("SAFO", NOON, NOON.minusSeconds(2700), levels(12_000, 1))).get(0);
+            assertThat(whole.id()).isEqualTo(coded.id());
+            assertThat(whole.version()).isEqualTo(2);
+            assertThat(newest(whole).levels()).hasSize(48);
+            assertThat(newest(whole).parts()).isEmpty();
+            Kept late = keep("TEMP", part("SAFO", NOON, "TTBB", "", significantLevels())).get(0);
+            assertThat(late.id()).isEqualTo(coded.id());
+            assertThat(late.version()).isEqualTo(2);
+            assertThat(late.duplicate()).isFalse();
+            assertThat(late.remarks()).extracting(Remark::code).contains("COARSER_THAN_THE_FILE");
+            assertThat(newest(whole).levels()).hasSize(48);
+            assertThat(archive.raw(coded.id(), 1)).isEqualTo("TTAA of SAFO ");
+            assertThat(archive.raw(coded.id(), 2)).isEqualTo("file of SAFO with 48 levels");
+            assertThat(keep("TEMP", part("SAFO", NOON, "TTBB", "", significantLevels())).get(0).duplicate()).isTrue();
+            assertThat(archive.between("SAFO", NOON.minusSeconds(8000), NOON.plusSeconds(1), AsKnownAt.now())).hasSize(1);
+        }
+
+        @Test
         void partsOfOneBulletinAreOneVersionAndTheSamePartOfTheNextHourIsAnotherAscent() {
             List<Kept> kept = keep("TEMP", part("SABU", NOON, "TTAA", "", standardLevels(1)), part("SABU", NOON, "TTBB", "", significantLevels()),
                     part("SABU", NOON.plus(Duration.ofHours(2)), "TTAA", "", standardLevels(1.2)));
