@@ -15,6 +15,7 @@ import org.shearbook.desk.sounding.SoundingArchive;
 import org.shearbook.desk.sounding.SoundingId;
 import org.shearbook.desk.sounding.SoundingKept;
 import org.shearbook.met.profile.RoundedCornerFunction;
+import org.shearbook.met.richardson.InstrumentNoise;
 import org.shearbook.met.richardson.RichardsonAnalysis;
 import org.slf4j.Logger;
 import org.slf4j.LoggerFactory;
@@ -34,7 +35,7 @@ import tools.jackson.databind.json.JsonMapper;
 public class AnalysisBook {
 
     /** Of the methods together. It changes with every change that can change a number. */
-    public static final String METHOD_VERSION = "1";
+    public static final String METHOD_VERSION = "2";
 
     private static final Logger log = LoggerFactory.getLogger(AnalysisBook.class);
     private static final JsonMapper JSON = JsonMapper.shared();
@@ -108,6 +109,17 @@ public class AnalysisBook {
      * @throws WindowNotOffered when it is another
      */
     public Analysis compute(Sounding sounding, double window) {
+        return compute(sounding, window, null);
+    }
+
+    /**
+     * Analyses a sounding without keeping anything, with the spread of growth over the instrument's errors.
+     *
+     * @param window full width at half maximum [m], one of {@link #windows()}
+     * @param spread null for none
+     * @throws WindowNotOffered when it is another
+     */
+    public Analysis compute(Sounding sounding, double window, @Nullable EnsembleRequest spread) {
         if (!windows().contains(window)) {
             throw new WindowNotOffered(String.valueOf(window));
         }
@@ -116,7 +128,7 @@ public class AnalysisBook {
         if (notAnalysed == null && sounding.profile() != null) {
             try {
                 document = DocumentWriter.write(sounding.id().value() == 0 ? null : sounding.id().value(), sounding.stationId(), sounding.launchedAt(),
-                        sounding.profile(), window).withLevels(DocumentWriter.levels(sounding.levels()));
+                        sounding.profile(), InstrumentNoise.ofSondeType(sounding.header().sondeType()), window, spread).withLevels(DocumentWriter.levels(sounding.levels()));
             } catch (IllegalArgumentException impossible) {
                 notAnalysed = impossible.getMessage();
             } catch (RuntimeException failed) {

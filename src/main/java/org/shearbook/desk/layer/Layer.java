@@ -46,4 +46,9 @@ public record Layer(
     public Layer {
         remarkCodes = List.copyOf(remarkCodes);
     }
+
+    /** Whether too few wind levels lie inside for anything to be said about growth. */
+    public boolean growthUnknown() {
+        return remarkCodes.contains("FEW_WIND_LEVELS");
+    }
 }

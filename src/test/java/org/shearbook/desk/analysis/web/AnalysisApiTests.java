@@ -47,11 +47,11 @@ class AnalysisApiTests {
     void theKeptAnalysisIsAnsweredAndOtherWindowsAreComputed() throws Exception {
         SoundingId id = kept("AA-A");
         web.perform(get("/api/v1/soundings/" + id + "/analysis")).andExpect(status().isOk())
-                .andExpect(header().string("ETag", "\"" + id + "-1-1-200\""))
+                .andExpect(header().string("ETag", "\"" + id + "-1-2-200\""))
                 .andExpect(jsonPath("$.soundingId").value(id.value())).andExpect(jsonPath("$.station").value("AA-A"))
                 .andExpect(jsonPath("$.launchedAt").value("2031-02-05T11:15:00Z"))
                 .andExpect(jsonPath("$.method.windowM").value(200.0)).andExpect(jsonPath("$.levels", hasSize(1596)))
-                .andExpect(jsonPath("$.lowest.richardson", lessThan(0.25))).andExpect(jsonPath("$.layers[0].mode").value(nullValue()))
+                .andExpect(jsonPath("$.lowest.richardson", lessThan(0.25))).andExpect(jsonPath("$.layers[0].mode.converged").value(true)).andExpect(jsonPath("$.layers[0].turbulence.class").exists())
                 .andExpect(jsonPath("$.layers[0].rule.basis").value("rule, not solved"));
         web.perform(get("/api/v1/soundings/" + id + "/analysis").param("windowM", "600")).andExpect(status().isOk())
                 .andExpect(jsonPath("$.method.windowM").value(600.0));
