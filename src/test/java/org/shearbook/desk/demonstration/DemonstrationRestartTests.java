@@ -3,6 +3,7 @@ package org.shearbook.desk.demonstration;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import java.io.IOException;
+import java.net.CookieManager;
 import java.net.ServerSocket;
 import java.net.URI;
 import java.net.http.HttpClient;
@@ -45,15 +46,15 @@ class DemonstrationRestartTests {
         assertThat(said).contains("http://127.0.0.1:" + port + "/").contains("forecaster-a").contains("observer-o").contains("ennersund");
         assertThat(occurrences(get(port, "/api/v1/air-reports?from=2031-03-10T00:00:00Z&until=2031-03-15T00:00:00Z&limit=500"), "\"observedAt\"")).isEqualTo(61);
         assertThat(occurrences(get(port, "/api/v1/soundings?from=2031-03-10T00:00:00Z&until=2031-03-15T00:00:00Z&limit=500"), "\"nominalAt\"")).isEqualTo(23);
-        assertThat(get(port, "/api/v1/audit-entries/integrity")).contains("\"intact\":true");
-        Instant before = newestTime(get(port, "/api/v1/audit-entries?limit=1"));
+        assertThat(getAsSupervisor(port, "/api/v1/audit-entries/integrity")).contains("\"intact\":true");
+        Instant before = newestTime(getAsSupervisor(port, "/api/v1/audit-entries?limit=1"));
         kill();
 
         start(port, "third.log");
         waitFor("third.log", "Shearbook is ready");
         assertThat(occurrences(get(port, "/api/v1/air-reports?from=2031-03-10T00:00:00Z&until=2031-03-15T00:00:00Z&limit=500"), "\"observedAt\"")).isEqualTo(61);
-        assertThat(get(port, "/api/v1/audit-entries/integrity")).contains("\"intact\":true");
-        assertThat(newestTime(get(port, "/api/v1/audit-entries?limit=1"))).as("nothing was played again").isEqualTo(before);
+        assertThat(getAsSupervisor(port, "/api/v1/audit-entries/integrity")).contains("\"intact\":true");
+        assertThat(newestTime(getAsSupervisor(port, "/api/v1/audit-entries?limit=1"))).as("nothing was played again").isEqualTo(before);
     }
 
     private void start(int port, String log) throws IOException {
@@ -84,6 +85,21 @@ class DemonstrationRestartTests {
     private static String get(int port, String path) throws Exception {
         HttpResponse<String> answer = HttpClient.newHttpClient().send(HttpRequest.newBuilder(URI.create("http://127.0.0.1:" + port + path))
                 .header("Authorization", "Bearer ennersund-demo").build(), HttpResponse.BodyHandlers.ofString());
+        assertThat(answer.statusCode()).as(path + " " + answer.body()).isEqualTo(200);
+        return answer.body();
+    }
+
+    /** What only a supervisor sees. */
+    private static String getAsSupervisor(int port, String path) throws Exception {
+        HttpClient browser = HttpClient.newBuilder().cookieHandler(new CookieManager()).build();
+        URI login = URI.create("http://127.0.0.1:" + port + "/login");
+        String form = browser.send(HttpRequest.newBuilder(login).build(), HttpResponse.BodyHandlers.ofString()).body();
+        Matcher token = Pattern.compile("name=\"_csrf\" value=\"([^\"]+)\"").matcher(form);
+        assertThat(token.find()).isTrue();
+        browser.send(HttpRequest.newBuilder(login).header("Content-Type", "application/x-www-form-urlencoded")
+                .POST(HttpRequest.BodyPublishers.ofString("username=supervisor-s&password=ennersund&_csrf=" + token.group(1))).build(),
+                HttpResponse.BodyHandlers.discarding());
+        HttpResponse<String> answer = browser.send(HttpRequest.newBuilder(URI.create("http://127.0.0.1:" + port + path)).build(), HttpResponse.BodyHandlers.ofString());
         assertThat(answer.statusCode()).as(path + " " + answer.body()).isEqualTo(200);
         return answer.body();
     }
