@@ -40,6 +40,7 @@ function columnDetail(column, display, deskMinute) {
       ['tropopause', flightLevelText(column.tropopauseFlightLevel)],
       ['highest wind', isNumber(column.maxWindKt) ? `${knotsText(column.maxWindKt)} at ${flightLevelText(column.maxWindFlightLevel)}`
         + (column.maxWindAtTopOfData ? ', top of the data: may be higher' : '') : MISSING],
+      ['also as', (column.coarserSoundingIds ?? []).map(it => `sounding ${it}, fewer levels`).join(', ')],
       ['carried until', dayHhmmZ(column.carriedUntilMinute * 60000)],
     ]),
     link(column.analysed ? `/soundings/${id(column.soundingId)}` : '/intake', column.analysed ? 'Open sounding' : 'Open Intake'),

@@ -43,11 +43,12 @@ public record TimeHeight(
      * @param maxWindAtTopOfData whether the highest wind was at the top of what was observed, so that more may lie above
      * @param lowestRichardsonPer1000Ft the lowest Ri between flight level 10 k and 10 (k + 1) at index k; null where
      *                      nothing was observed
+     * @param coarserSoundingIds the same ascent in other formats, not drawn because they hold fewer levels
      */
     public record Column(
             long soundingId, int version, Instant nominalAt, Instant launchedAt, Instant carriedUntil, @Nullable String notAnalysed,
             @Nullable Levels levels, @Nullable Double tropopauseFlightLevel, @Nullable Double maxWindKt, @Nullable Double maxWindFlightLevel,
-            boolean maxWindAtTopOfData, List<@Nullable Double> lowestRichardsonPer1000Ft) {
+            boolean maxWindAtTopOfData, List<@Nullable Double> lowestRichardsonPer1000Ft, List<Long> coarserSoundingIds) {
     }
 
     /**

@@ -9,6 +9,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
+import java.util.stream.Collectors;
 import org.jspecify.annotations.Nullable;
 import org.shearbook.desk.airreport.AirReport;
 import org.shearbook.desk.airreport.AirReportArchive;
@@ -190,12 +191,19 @@ public class TimeHeightDisplay {
         List<SoundingId> ids = found.stream().map(SoundingHeader::id).toList();
         Map<SoundingId, AnalysisSummary> summaries = analyses.summaries(ids, asKnownAt);
         Map<SoundingId, AnalysisColumn> analysed = analyses.columns(ids, asKnownAt);
-        return found.stream().map(header -> column(header, summaries.get(header.id()), analysed.get(header.id())))
+        // one ascent that came in two formats is two soundings; the one with the most levels is drawn
+        Map<Instant, List<SoundingHeader>> ascents = found.stream().collect(Collectors.groupingBy(TimeHeightDisplay::nominalOf));
+        Comparator<SoundingHeader> finest = Comparator.comparing((SoundingHeader header) -> analysed.containsKey(header.id()))
+                .thenComparing(SoundingHeader::levelCount).thenComparing(header -> header.id().value()).reversed();
+        return ascents.values().stream().map(same -> same.stream().sorted(finest).toList())
+                .map(same -> column(same.get(0), summaries.get(same.get(0).id()), analysed.get(same.get(0).id()),
+                        same.stream().skip(1).map(other -> other.id().value()).toList()))
                 .filter(column -> column.carriedUntil().isAfter(time.from()))
                 .sorted(Comparator.comparing(TimeHeight.Column::launchedAt)).toList();
     }
 
-    private TimeHeight.Column column(SoundingHeader header, @Nullable AnalysisSummary summary, @Nullable AnalysisColumn analysed) {
+    private TimeHeight.Column column(SoundingHeader header, @Nullable AnalysisSummary summary, @Nullable AnalysisColumn analysed,
+            List<Long> coarser) {
         Instant nominal = nominalOf(header);
         Instant launched = header.launchedAt() == null ? nominal.minus(RELEASE_BEFORE_NOMINAL) : header.launchedAt();
         Instant carriedUntil = nominal.plus(settings.carried());
@@ -204,7 +212,7 @@ public class TimeHeightDisplay {
             reason = "fewer than two levels have a flight level";
         }
         if (reason != null) {
-            return new TimeHeight.Column(header.id().value(), header.version(), nominal, launched, carriedUntil, reason, null, null, null, null, false, List.of());
+            return new TimeHeight.Column(header.id().value(), header.version(), nominal, launched, carriedUntil, reason, null, null, null, null, false, List.of(), coarser);
         }
         double start = launched.getEpochSecond() / 60.0;
         double[] minute = analysed.elapsed().clone();
@@ -215,7 +223,7 @@ public class TimeHeightDisplay {
         return new TimeHeight.Column(header.id().value(), header.version(), nominal, launched, carriedUntil, null, levels.thinned(),
                 summary.tropopauseFlightLevel(),
                 summary.greatestWind() == null ? null : Units.metresPerSecondToKnots(summary.greatestWind()),
-                summary.greatestWindFlightLevel(), summary.windAtTopOfData(), levels.lowestPerThousandFeet());
+                summary.greatestWindFlightLevel(), summary.windAtTopOfData(), levels.lowestPerThousandFeet(), coarser);
     }
 
     private static Instant nominalOf(SoundingHeader header) {

@@ -16,6 +16,7 @@ import java.time.Duration;
 import java.time.Instant;
 import java.util.List;
 import java.util.Set;
+import java.util.stream.IntStream;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
@@ -29,6 +30,7 @@ import org.shearbook.desk.forecast.ForecastBook;
 import org.shearbook.desk.forecast.ForecastSamples;
 import org.shearbook.desk.sounding.Arrived;
 import org.shearbook.desk.sounding.SoundingArchive;
+import org.shearbook.desk.sounding.SoundingId;
 import org.shearbook.desk.staff.DeskHoldingBook;
 import org.shearbook.desk.staff.PersonBook;
 import org.shearbook.desk.staff.Role;
@@ -249,6 +251,21 @@ class TimeHeightControllerTests {
     }
 
     @Test
+    void ofOneAscentInTwoFormatsTheFinerIsDrawnAndTheOtherNamed() throws Exception {
+        station("THAL", "Lorrin", -40, 30);
+        List<ReportedLevel> fine = JetAscents.KELBRITH_DAY_2_12.reported();
+        List<ReportedLevel> coarse = IntStream.range(0, fine.size() / 40).mapToObj(k -> fine.get(40 * k)).toList();
+        keep("THAL", coarse, SIX, "FM 35 TEMP");
+        keep("THAL", fine, SIX, "CSV sounding");
+        JsonNode answer = answer("THAL", SHOWN);
+        assertThat(answer.at("/columns").size()).isEqualTo(1);
+        assertThat(answer.at("/columns/0/coarserSoundingIds").size()).isEqualTo(1);
+        assertThat(answer.at("/columns/0/coarserSoundingIds/0").asLong()).isNotEqualTo(answer.at("/columns/0/soundingId").asLong());
+        assertThat(soundings.header(new SoundingId(answer.at("/columns/0/soundingId").asLong()), AsKnownAt.now()).orElseThrow().levelCount())
+                .isEqualTo(fine.size());
+    }
+
+    @Test
     void whatCannotBeShownIsRefusedWithTheFieldAndWhatToDo() throws Exception {
         station("THAI", "Inver", -40, 20);
         refused("/api/v1/time-height?station=NOWHERE", 404, "STATION_UNKNOWN", "station");
@@ -282,9 +299,13 @@ class TimeHeightControllerTests {
     }
 
     private void keep(String station, List<ReportedLevel> levels, Instant nominal) {
+        keep(station, levels, nominal, "CSV sounding");
+    }
+
+    private void keep(String station, List<ReportedLevel> levels, Instant nominal, String format) {
         DecodedSounding sounding = new DecodedSounding(station, Double.NaN, Double.NaN, Double.NaN, nominal, nominal.minus(Duration.ofMinutes(45)), Set.of(), "", "",
                 levels, "invented ascent of " + station + " " + nominal, 1, List.of());
-        transaction.executeWithoutResult(status -> soundings.keepAll(B, List.of(new Arrived(sounding, "CSV sounding")), nominal.plusSeconds(2700)));
+        transaction.executeWithoutResult(status -> soundings.keepAll(B, List.of(new Arrived(sounding, format)), nominal.plusSeconds(2700)));
     }
 
     private void keepReport(DecodedAirReport report) {
