@@ -36,7 +36,11 @@ const MARK_PX = 18;
 const PAPER = { width: 1030, height: 198, pointsPerPixel: 3 };
 
 export async function mount(root) {
-  await Promise.all([...root.querySelectorAll('[data-time-height]')].map(show));
+  const hosts = [...root.querySelectorAll('[data-time-height]')];
+  await Promise.all(hosts.map(show));
+  // the tables stand open for whoever has no picture; beside one they fold up unless somebody came for them
+  const tables = root.getElementById('tables');
+  if (tables && hosts.length && hosts.every(host => host.dataset.drawn) && root.location.hash !== '#tables') tables.open = false;
 }
 
 /** Fills one element with the display; resolves when the first picture stands. */
