@@ -50,7 +50,7 @@ function drawing(read, windowM) {
   const y = scale(0, top, HEIGHT - FOOT, TOP);
   const step = (WIDTH - LEFT - 46) / read.length;
   const words = read.map(one => `${one.station} ${dayHhmmZ(one.observedAt)}: lowest Ri ${richardsonText(one.analysis.lowest?.richardson)} at ${flightLevelText(one.analysis.lowest?.flightLevel)}`);
-  const image = svg('svg', { class: 'strips', viewBox: `0 0 ${WIDTH} ${HEIGHT}`, role: 'img', 'aria-label': `Richardson number over height, window ${windowM} m. ${words.join('. ')}.` });
+  const image = svg('svg', { class: 'strips', viewBox: `0 0 ${WIDTH} ${HEIGHT}`, role: 'group', 'aria-label': `Richardson number over height, window ${windowM} m. ${words.join('. ')}.` });
   image.append(text(LEFT - 8, TOP - 10, 'FL', '', 'end'), text(WIDTH - 38, TOP - 10, 'km', '', 'start'));
   for (const { flightLevel, heightM } of flightLevelMarks(read[0].analysis.profile, 50)) {
     if (heightM > top) continue;
