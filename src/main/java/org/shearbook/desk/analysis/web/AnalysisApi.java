@@ -7,6 +7,7 @@ import org.jspecify.annotations.Nullable;
 import org.shearbook.desk.analysis.Analysis;
 import org.shearbook.desk.analysis.AnalysisBook;
 import org.shearbook.desk.analysis.AnalysisDocument;
+import org.shearbook.desk.analysis.EnsembleRequest;
 import org.shearbook.desk.analysis.WindowNotOffered;
 import org.shearbook.desk.audit.AsKnownAt;
 import org.shearbook.desk.shell.Problem;
@@ -45,18 +46,23 @@ class AnalysisApi {
     }
 
     @GetMapping("/soundings/{id}/analysis")
-    ResponseEntity<AnalysisDocument> ofSounding(@PathVariable long id, @RequestParam(required = false) @Nullable String windowM, AsKnownAt asKnownAt) {
+    ResponseEntity<AnalysisDocument> ofSounding(@PathVariable long id, @RequestParam(required = false) @Nullable String windowM,
+            @RequestParam(required = false) @Nullable Integer ensembleMembers, @RequestParam(defaultValue = "1") long seed, AsKnownAt asKnownAt) {
         double window = window(windowM);
+        EnsembleRequest spread = spread(ensembleMembers, seed);
         SoundingId soundingId = new SoundingId(id);
         Analysis kept = analyses.of(soundingId, asKnownAt).orElseThrow(() -> new UnknownSounding(soundingId));
-        Analysis asked = window == AnalysisBook.defaultWindow() ? kept
-                : analyses.compute(soundings.find(soundingId, asKnownAt).orElseThrow(() -> new UnknownSounding(soundingId)), window);
-        return ResponseEntity.ok().eTag("\"%d-%d-%s-%.0f\"".formatted(id, kept.version(), AnalysisBook.METHOD_VERSION, window)).body(document(asked));
+        Analysis asked = window == AnalysisBook.defaultWindow() && spread == null ? kept
+                : analyses.compute(soundings.find(soundingId, asKnownAt).orElseThrow(() -> new UnknownSounding(soundingId)), window, spread);
+        return ResponseEntity.ok().eTag("\"%d-%d-%s-%.0f%s\"".formatted(id, kept.version(), asked.summary().methodVersion(), window,
+                spread == null ? "" : "-" + spread.members() + "-" + spread.seed())).body(document(asked));
     }
 
     @PostMapping("/profile-analyses")
-    AnalysisDocument ofBytes(@RequestBody(required = false) byte @Nullable [] body, @RequestParam(required = false) @Nullable String windowM) {
+    AnalysisDocument ofBytes(@RequestBody(required = false) byte @Nullable [] body, @RequestParam(required = false) @Nullable String windowM,
+            @RequestParam(required = false) @Nullable Integer ensembleMembers, @RequestParam(defaultValue = "1") long seed) {
         double window = window(windowM);
+        EnsembleRequest spread = spread(ensembleMembers, seed);
         SoundingArchive.Reading reading = soundings.read(body == null ? new byte[0] : body, clock.instant());
         List<Sounding> read = reading.soundings();
         if (read.size() > 1) {
@@ -69,7 +75,7 @@ class AnalysisApi {
                     : refused(rejected.get(0).code(), rejected.get(0).text(), Map.of("line", rejected.get(0).line(),
                             "rejected", rejected.stream().limit(20).map(one -> new RejectionView(one.line(), one.code(), one.text())).toList()));
         }
-        return document(analyses.compute(read.get(0), window));
+        return document(analyses.compute(read.get(0), window, spread));
     }
 
     record RejectionView(int line, String code, String text) {
@@ -81,6 +87,17 @@ class AnalysisApi {
 
     private static ErrorResponseException refused(String code, String text, Map<String, Object> more) {
         return new ErrorResponseException(HttpStatus.UNPROCESSABLE_CONTENT, Problem.of(HttpStatus.UNPROCESSABLE_CONTENT, code, text, more), null);
+    }
+
+    private static @Nullable EnsembleRequest spread(@Nullable Integer members, long seed) {
+        if (members == null) {
+            return null;
+        }
+        if (members < 1 || members > EnsembleRequest.MOST_MEMBERS) {
+            throw new ErrorResponseException(HttpStatus.BAD_REQUEST, Problem.of(HttpStatus.BAD_REQUEST, "ENSEMBLE_OUT_OF_RANGE",
+                    "ensembleMembers is 1 to %d; leave it out for none.".formatted(EnsembleRequest.MOST_MEMBERS), Map.of("field", "ensembleMembers")), null);
+        }
+        return new EnsembleRequest(members, seed);
     }
 
     static double window(@Nullable String text) {

@@ -69,6 +69,16 @@ class AnalysisApiTests {
     }
 
     @Test
+    void theSpreadOfGrowthIsWorkedOutWhenAskedFor() throws Exception {
+        SoundingId id = kept("AA-E");
+        web.perform(get("/api/v1/soundings/" + id + "/analysis").param("ensembleMembers", "4").param("seed", "9")).andExpect(status().isOk())
+                .andExpect(header().string("ETag", "\"" + id + "-1-2-200-4-9\"")).andExpect(jsonPath("$.layers[0].ensemble.members").value(4))
+                .andExpect(jsonPath("$.layers[0].ensemble.seed").value(9));
+        web.perform(get("/api/v1/soundings/" + id + "/analysis").param("ensembleMembers", "100000")).andExpect(status().isBadRequest())
+                .andExpect(jsonPath("$.code").value("ENSEMBLE_OUT_OF_RANGE"));
+    }
+
+    @Test
     void bytesAreAnalysedWithoutBeingKept() throws Exception {
         long before = soundings.between(null, Instant.parse("0001-01-01T00:00:00Z"), Instant.parse("9999-01-01T00:00:00Z"),
                 org.shearbook.desk.audit.AsKnownAt.now()).size();

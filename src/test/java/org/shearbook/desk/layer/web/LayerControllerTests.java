@@ -63,6 +63,16 @@ class LayerControllerTests {
     }
 
     @Test
+    void aStationsLayersAreShownFromSoundingToSounding() throws Exception {
+        kept(Ascents.of(JetAscents.KELBRITH_DAY_2_12, "LC-H", Instant.parse("2031-03-12T06:00:00Z")), "2031-03-12T06:10:00Z");
+        String page = web.perform(get("/layers/histories").param("station", "LC-H")).andExpect(status().isOk()).andReturn().getResponse().getContentAsString();
+        assertThat(page).contains("Layers between soundings").contains("dRi/dt").contains("Ri is below 0.25").contains("is-subcritical").doesNotContain("??");
+        assertThat(web.perform(get("/layers/histories").param("station", "LC-nowhere")).andExpect(status().isOk()).andReturn().getResponse().getContentAsString())
+                .contains("No sounding of LC-nowhere");
+        web.perform(get("/layers/histories")).andExpect(status().isOk());
+    }
+
+    @Test
     void scriptsReadLayersOfAStationInAWindow() throws Exception {
         Kept sounding = kept(Ascents.of(JetAscents.OSSENFELL_DAY_2_12, "LC-D", Instant.parse("2030-03-12T06:00:00Z")), "2030-03-12T06:10:00Z");
         web.perform(get("/api/v1/layers").param("station", "LC-D").param("from", "2030-03-12").param("until", "2030-03-13")).andExpect(status().isOk())
