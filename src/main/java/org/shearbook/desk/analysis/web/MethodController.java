@@ -3,6 +3,9 @@ package org.shearbook.desk.analysis.web;
 import org.shearbook.desk.analysis.AnalysisBook;
 import org.shearbook.desk.shell.MenuEntry;
 import org.shearbook.met.decode.EdrClasses;
+import org.shearbook.met.profile.SaturationRule;
+import org.shearbook.met.richardson.InstrumentNoise;
+import org.shearbook.met.taylorgoldstein.SearchSettings;
 import org.springframework.context.annotation.Bean;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
@@ -19,6 +22,9 @@ class MethodController {
         model.addAttribute("windows", AnalysisBook.windows().stream().map(window -> String.valueOf(window.intValue())).toList());
         model.addAttribute("smoothing", AnalysisBook.smoothing(AnalysisBook.defaultWindow()));
         model.addAttribute("edrClasses", EdrClasses.known());
+        model.addAttribute("noises", InstrumentNoise.known());
+        model.addAttribute("saturation", SaturationRule.DEFAULT);
+        model.addAttribute("search", SearchSettings.forLayers());
         return "analysis/method";
     }
 

@@ -30,4 +30,14 @@ class MethodControllerTests {
         assertThat(page).contains("60, 100, 150, 200, 300, 600").contains("84.9").contains("0.20").contains("Why you may disagree")
                 .contains("20th edition").doesNotContain("??");
     }
+
+    @Test
+    void everyNumberOfAScreenHasAPlaceToLinkToAndTheNoiseInUseIsShown() throws Exception {
+        String page = web.perform(get("/method")).andExpect(status().isOk()).andReturn().getResponse().getContentAsString();
+        for (String place : new String[] {"numbers", "stability", "moist", "shear", "richardson", "probability", "hidden", "layers", "state", "between", "growth",
+            "distance", "breakdown", "turbulence", "indices", "versions", "billows", "references"}) {
+            assertThat(page).as(place).containsOnlyOnce("id=\"" + place + "\"");
+        }
+        assertThat(page).contains("any sonde").contains("RS41").contains("24 × 40").contains("0.03 in Ri").contains("half of the growth rate");
+    }
 }
