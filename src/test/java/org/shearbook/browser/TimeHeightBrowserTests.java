@@ -134,6 +134,7 @@ class TimeHeightBrowserTests extends DeskInBrowser {
             page.locator("[data-set-brightness=day]").click();
             picture(page, "time-height-" + theme);
         }
+        assertThat(complaints).isEmpty();
     }
 
     @Test
