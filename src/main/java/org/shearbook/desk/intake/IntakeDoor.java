@@ -48,6 +48,8 @@ public class IntakeDoor {
 
     private static final Logger log = LoggerFactory.getLogger(IntakeDoor.class);
     private static final int SALT_BYTES = 16;
+    private static final int MOST_LINES = 500_000;
+    private static final String TOO_MANY_LINES = "This has more than %d lines, more than one arrival may hold. Nothing of it was kept. Send it in parts.".formatted(MOST_LINES);
     private static final int LONGEST_NAME = 200;
     private static final int LONGEST_FORMAT = 40;
 
@@ -112,6 +114,9 @@ public class IntakeDoor {
     /** Reads without keeping anything. */
     public Decoding decode(byte[] bytes) {
         Instant receivedAt = clock.instant();
+        if (hasTooManyLines(bytes)) {
+            return new Decoding("UNKNOWN", List.of(), List.of(new Rejection(1, 0, "TOO_MANY_LINES", TOO_MANY_LINES, "")));
+        }
         String compression = ReceivedBytes.compression(bytes);
         if (compression != null) {
             return new Decoding("UNKNOWN", List.of(), List.of(new Rejection(1, 0, "COMPRESSED", compressed(compression), "")));
@@ -145,8 +150,22 @@ public class IntakeDoor {
         if (arrival.bytes().length > Arrival.MOST_BYTES) {
             return new Refused(number, name(arrival), "TOO_LARGE", "This is more than one arrival may hold (64 MB). Send it in parts.");
         }
+        if (hasTooManyLines(arrival.bytes())) {
+            return new Refused(number, name(arrival), "TOO_MANY_LINES", TOO_MANY_LINES);
+        }
         String compression = ReceivedBytes.compression(arrival.bytes());
         return compression == null ? null : new Refused(number, name(arrival), "COMPRESSED", compressed(compression));
+    }
+
+    /** A few bytes a line make millions of messages: one request must not hold the desk for minutes. */
+    private static boolean hasTooManyLines(byte[] bytes) {
+        int lines = 0;
+        for (byte one : bytes) {
+            if (one == '\n' && ++lines > MOST_LINES) {
+                return true;
+            }
+        }
+        return false;
     }
 
     private static String compressed(String compression) {
@@ -252,13 +271,36 @@ public class IntakeDoor {
         long batchId = rows.draw("intake_batch_seq");
         keepAirReports(actor, readable, receivedAt, batchId, accepted);
         List<Accepted> all = List.of(accepted);
-        List<Queued> queued = new ArrayList<>(sorted.unreadable.size());
-        for (Unreadable one : sorted.unreadable) {
-            queued.add(new Queued(rows.draw("intake_item_seq"), one.arrival(), one.line(), one.column(), one.code(), one.text()));
-        }
+        List<Queued> queued = queue(sorted, batchId);
         TakenIn taken = new TakenIn(batchId, all, queued, sorted.refused);
         write(actor, channel, sorted, taken, receivedAt, recordedAt);
         return taken;
+    }
+
+    /** What needs a person: one item for the same bytes, however often they come. */
+    private List<Queued> queue(Sorted sorted, long batchId) {
+        List<String> fingerprints = sorted.unreadable.stream()
+                .map(one -> fingerprint(one, sorted.arrivals.get(one.arrival() - 1).arrival().bytes())).toList();
+        Map<String, IntakeRows.Known> known = new HashMap<>(rows.known(new HashSet<>(fingerprints)));
+        Map<String, IntakeRows.Known> added = new LinkedHashMap<>();
+        List<Queued> queued = new ArrayList<>(sorted.unreadable.size());
+        for (int k = 0; k < fingerprints.size(); k++) {
+            Unreadable one = sorted.unreadable.get(k);
+            IntakeRows.Known item = known.get(fingerprints.get(k));
+            boolean duplicate = item != null;
+            if (item == null) {
+                item = new IntakeRows.Known(rows.draw("intake_item_seq"), 1);
+                known.put(fingerprints.get(k), item);
+                added.put(fingerprints.get(k), item);
+            }
+            queued.add(new Queued(item.recordId(), one.arrival(), one.line(), one.column(), one.code(), one.text(), duplicate));
+        }
+        rows.addFingerprints("queueItem", added, batchId);
+        return queued;
+    }
+
+    private static String fingerprint(Unreadable one, byte[] arrival) {
+        return Digests.of(one.code().getBytes(StandardCharsets.US_ASCII), one.raw() == null ? arrival : one.raw());
     }
 
     private void keepSoundings(Actor actor, List<Readable> readable, Instant receivedAt, Accepted[] accepted) {
@@ -303,7 +345,7 @@ public class IntakeDoor {
             added.put(fingerprint, new IntakeRows.Known(kept.get(next).id().value(), kept.get(next).version()));
             next++;
         }
-        rows.addFingerprints(added, batchId);
+        rows.addFingerprints(Accepted.AIR_REPORT, added, batchId);
         Set<String> said = new HashSet<>();
         fingerprints.forEach((place, fingerprint) -> {
             Readable one = readable.get(place);
@@ -342,14 +384,16 @@ public class IntakeDoor {
             }
         }
         rows.addRecords(taken.batchId(), taken.accepted());
-        rows.addItems(taken.batchId(), taken.queued(), raws(sorted), receivedAt, recordedAt);
+        List<Queued> newItems = new ArrayList<>();
+        List<byte @Nullable []> raws = new ArrayList<>();
+        for (int k = 0; k < taken.queued().size(); k++) {
+            if (!taken.queued().get(k).duplicate()) {
+                newItems.add(taken.queued().get(k));
+                raws.add(sorted.unreadable.get(k).raw());
+            }
+        }
+        rows.addItems(taken.batchId(), newItems, raws, receivedAt, recordedAt);
         events.publishEvent(new MessagesTakenIn(actor, taken.batchId(), taken.accepted().size(), duplicates, taken.queued().size(), taken.refused().size(), digest));
-    }
-
-    private static List<byte @Nullable []> raws(Sorted sorted) {
-        List<byte @Nullable []> raws = new ArrayList<>(sorted.unreadable.size());
-        sorted.unreadable.forEach(one -> raws.add(one.raw()));
-        return raws;
     }
 
     private static String digest(Sorted sorted, TakenIn taken) {

@@ -63,9 +63,9 @@ class IntakeRows {
         return known;
     }
 
-    void addFingerprints(Map<String, Known> fingerprints, long batchId) {
+    void addFingerprints(String kind, Map<String, Known> fingerprints, long batchId) {
         insert("insert into intake_fingerprint (fingerprint, record_kind, record_id, record_version, batch_id) values (?, ?, ?, ?, ?)",
-                fingerprints.entrySet().stream().map(one -> new Object[] {one.getKey(), Accepted.AIR_REPORT, one.getValue().recordId(), one.getValue().version(), batchId}).toList(),
+                fingerprints.entrySet().stream().map(one -> new Object[] {one.getKey(), kind, one.getValue().recordId(), one.getValue().version(), batchId}).toList(),
                 Types.VARCHAR, Types.VARCHAR, Types.BIGINT, Types.INTEGER, Types.BIGINT);
     }
 

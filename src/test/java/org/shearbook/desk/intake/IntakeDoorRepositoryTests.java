@@ -87,6 +87,24 @@ class IntakeDoorRepositoryTests {
         }
 
         @Test
+        void theSameUnreadableBytesTwiceMakeOneItem() {
+            byte[] noise = "\u0007\u0008 nobody reads this, whoever sends it".repeat(5).getBytes(java.nio.charset.StandardCharsets.UTF_8);
+            Queued first = takeIn(noise).queued().get(0);
+            Queued again = takeIn(noise).queued().get(0);
+            assertThat(first.duplicate()).isFalse();
+            assertThat(again.duplicate()).isTrue();
+            assertThat(again.id()).isEqualTo(first.id());
+        }
+
+        @Test
+        void moreLinesThanOneArrivalMayHoldAreRefusedWholeAtOnce() {
+            TakenIn taken = takeIn("UA\n".repeat(500_002).getBytes(java.nio.charset.StandardCharsets.US_ASCII));
+            assertThat(taken.accepted()).isEmpty();
+            assertThat(taken.queued()).isEmpty();
+            assertThat(taken.refused()).singleElement().satisfies(one -> assertThat(one.code()).isEqualTo("TOO_MANY_LINES"));
+        }
+
+        @Test
         void aSoundingAndReportsOfOneBatchAreOneActInTheChain() {
             TakenIn taken = takeIn(csv("IDAA", "2031-03-12T05:15:00Z", "_kt", 1).getBytes(StandardCharsets.UTF_8),
                     (report(1) + "\n" + report(2) + "\n").getBytes(StandardCharsets.UTF_8));

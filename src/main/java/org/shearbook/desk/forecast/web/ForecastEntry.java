@@ -44,7 +44,7 @@ record ForecastEntry(@Nullable String intensity, @Nullable String conditions, @N
             put(fields, DraftFields.CENTRE, position.isEmpty() ? area.centre() : area.centre() == null || area.centre().isBlank() ? position : area.centre() + " " + position);
             put(fields, DraftFields.RADIUS, area.radiusNm());
             put(fields, DraftFields.CORNERS, area.corners() == null ? null
-                    : area.corners().stream().map(corner -> position(corner.latitudeDeg(), corner.longitudeDeg())).collect(Collectors.joining("\n")));
+                    : area.corners().stream().map(corner -> corner == null ? "missing" : position(corner.latitudeDeg(), corner.longitudeDeg())).collect(Collectors.joining("\n")));
         }
         put(fields, DraftFields.BASE, baseFlightLevel);
         put(fields, DraftFields.TOP, topFlightLevel);
@@ -54,7 +54,7 @@ record ForecastEntry(@Nullable String intensity, @Nullable String conditions, @N
         put(fields, DraftFields.TOWARD, movingToward);
         put(fields, DraftFields.SPEED, movingKt == null || "STNR".equals(movingToward) ? null : movingKt);
         put(fields, DraftFields.CHANGE, change);
-        put(fields, DraftFields.EVIDENCE, evidence == null ? null : evidence.stream().map(one -> one.kind() + " " + one.id())
+        put(fields, DraftFields.EVIDENCE, evidence == null ? null : evidence.stream().map(one -> one == null ? "missing" : one.kind() + " " + one.id())
                 .map(reference -> known.apply(reference).map(Evidence::ticked).orElse(reference)).collect(Collectors.joining("\n")));
         put(fields, DraftFields.WOULD_CHANGE, wouldChange);
         put(fields, DraftFields.SECOND_LOOK, secondLookBy);

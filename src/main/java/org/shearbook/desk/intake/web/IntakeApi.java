@@ -94,7 +94,7 @@ class IntakeApi {
 
         static TakenInView of(TakenIn taken) {
             return new TakenInView(taken.batchId(), taken.accepted().stream().map(AcceptedView::of).toList(),
-                    taken.queued().stream().map(one -> new QueuedView(one.id(), one.code() + ": " + one.text(), one.line(), one.column(), one.code(), one.text())).toList(),
+                    taken.queued().stream().map(one -> new QueuedView(one.id(), one.code() + ": " + one.text(), one.line(), one.column(), one.code(), one.text(), one.duplicate())).toList(),
                     taken.refused().stream().map(one -> new RejectedView(1, 0, one.code(), one.text())).toList());
         }
     }
@@ -106,7 +106,7 @@ class IntakeApi {
         }
     }
 
-    record QueuedView(long id, String reason, int line, int column, String code, String text) {
+    record QueuedView(long id, String reason, int line, int column, String code, String text, boolean duplicate) {
     }
 
     record RejectedView(int line, int column, String code, String text) {

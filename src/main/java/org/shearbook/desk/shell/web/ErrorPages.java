@@ -31,7 +31,8 @@ class ErrorPages implements ErrorController {
         HttpStatus status = statusOf(request);
         response.setStatus(status.value());
         model.addAttribute("reference", logged(request, status));
-        model.addAttribute("said", switch (status) {
+        Object said = request.getAttribute(PageRefusals.SAID);
+        model.addAttribute("said", said != null ? said : switch (status) {
             case NOT_FOUND -> "There is nothing at this address. It may have been typed wrong, or the record was never kept.";
             case FORBIDDEN -> "Your roles do not allow this. The page People and Keys says who may.";
             case CONTENT_TOO_LARGE -> "This is more than one upload may hold (64 MB). Send it in parts.";

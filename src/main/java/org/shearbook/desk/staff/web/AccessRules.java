@@ -11,15 +11,19 @@ import org.springframework.context.annotation.Configuration;
 import org.springframework.http.HttpMethod;
 import org.springframework.http.HttpStatus;
 import org.springframework.http.MediaType;
+import org.springframework.security.authentication.AnonymousAuthenticationToken;
 import org.springframework.security.authorization.AuthorizationManager;
 import org.springframework.security.authorization.AuthorizationManagers;
 import org.springframework.security.authorization.AuthorityAuthorizationManager;
 import org.springframework.security.config.annotation.web.builders.HttpSecurity;
+import org.springframework.security.core.Authentication;
+import org.springframework.security.core.context.SecurityContextHolder;
 import org.springframework.security.web.SecurityFilterChain;
 import org.springframework.security.web.access.intercept.RequestAuthorizationContext;
 import org.springframework.security.web.access.AccessDeniedHandlerImpl;
 import org.springframework.security.web.authentication.LoginUrlAuthenticationEntryPoint;
 import org.springframework.security.web.authentication.UsernamePasswordAuthenticationFilter;
+import org.springframework.security.web.csrf.CsrfException;
 import org.springframework.security.web.servlet.util.matcher.PathPatternRequestMatcher;
 import org.springframework.security.web.util.matcher.RequestMatcher;
 import tools.jackson.databind.json.JsonMapper;
@@ -65,7 +69,12 @@ class AccessRules {
                             }
                         })
                         .accessDeniedHandler((request, response, cause) -> {
-                            if (script.matches(request)) {
+                            if (script.matches(request) && !isSignedIn()) {
+                                refuse(response, json, HttpStatus.UNAUTHORIZED, "NOT_SIGNED_IN", "Sign in at /login, or send a key as Authorization: Bearer.");
+                            } else if (script.matches(request) && cause instanceof CsrfException) {
+                                refuse(response, json, HttpStatus.FORBIDDEN, "CSRF_TOKEN_MISSING",
+                                        "A signed-in browser sends the token of its page with each change, as the header X-CSRF-TOKEN. It is missing or old: read the page again.");
+                            } else if (script.matches(request)) {
                                 refuse(response, json, HttpStatus.FORBIDDEN, "NOT_ALLOWED", "Your roles or the scopes of this key do not allow this call.");
                             } else {
                                 new AccessDeniedHandlerImpl().handle(request, response, cause);
@@ -76,6 +85,12 @@ class AccessRules {
                         .referrerPolicy(policy -> policy.policy(
                                 org.springframework.security.web.header.writers.ReferrerPolicyHeaderWriter.ReferrerPolicy.SAME_ORIGIN)));
         return http.build();
+    }
+
+    /** The token of a form is looked at before the request knows its principal, so the context is asked. */
+    private static boolean isSignedIn() {
+        Authentication authentication = SecurityContextHolder.getContext().getAuthentication();
+        return authentication != null && !(authentication instanceof AnonymousAuthenticationToken);
     }
 
     private static void refuse(HttpServletResponse response, JsonMapper json, HttpStatus status, String code, String detail) throws IOException {
