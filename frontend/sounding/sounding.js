@@ -8,7 +8,7 @@ import { fixed, isNumber, msToKnots, probabilityText, richardsonText, shearText 
 import { analysisOf, html, say, svg, text } from './drawing.js';
 import { axis, bandStretches, every, flightLevelMarks, measuredRuns, onQuarterScale, pathOf, runs, scale, ticks } from './strips.js';
 
-const WIDTH = 1100;
+const WIDTH = 1240;
 const HEIGHT = 620;
 const TOP = 46;
 const FOOT = 34;
@@ -23,7 +23,7 @@ export async function mount(root) {
   const { id, windowM, asKnownAt } = place.dataset;
   try {
     const analysis = await analysisOf(id, { windowM, asKnownAt });
-    place.replaceChildren(...strips(analysis), layerTable(analysis), ...remarks(analysis));
+    place.replaceChildren(...strips(analysis), layerTable(analysis), ...growthTable(analysis), ...remarks(analysis));
   } catch (problem) {
     say(place, problem.message);
   }
@@ -35,10 +35,10 @@ function strips(analysis) {
   const base = Math.min(profile[0].heightM, ...levels.map(l => l.heightM).filter(isNumber).slice(0, 1));
   const top = profile[profile.length - 1].heightM;
   const y = scale(base, top, HEIGHT - FOOT, TOP);
-  const width = (WIDTH - LEFT - RIGHT - 4 * GAP) / 5;
+  const width = (WIDTH - LEFT - RIGHT - 6 * GAP) / 7;
   const drawing = svg('svg', {
     class: 'strips', viewBox: `0 0 ${WIDTH} ${HEIGHT}`, role: 'img',
-    'aria-label': `Temperature, wind, static stability, shear and Richardson number of ${analysis.station} on one height axis, window ${fixed(analysis.method.windowM, 0)} m. The layer table below has the numbers.`,
+    'aria-label': `Temperature, wind, static stability, shear, Richardson number, its probability of lying below a quarter, and growth of ${analysis.station} on one height axis, window ${fixed(analysis.method.windowM, 0)} m. The layer table below has the numbers.`,
   });
   drawing.append(heightAxis(profile, base, top, y));
   for (const layer of analysis.layers) drawing.append(layerBand(layer, y));
@@ -51,6 +51,8 @@ function strips(analysis) {
     lineStrip('N², 1e-4 s⁻²', profile, p => (isNumber(p.n2PerS2) ? p.n2PerS2 * 1e4 : null), x0(2), width, y),
     lineStrip('shear, kt/1000 ft', profile, p => p.shearKtPer1000Ft, x0(3), width, y),
     richardsonStrip(analysis, x0(4), width, y),
+    probabilityStrip(analysis, x0(5), width, y),
+    growthStrip(analysis, x0(6), width, y),
   );
   return [drawing];
 }
@@ -131,6 +133,49 @@ function richardsonStrip(analysis, x, width, y) {
   return group;
 }
 
+function probabilityStrip(analysis, x, width, y) {
+  const [group, place] = frame('P(Ri < ¼) at a level', x, width, axis([0, 1]));
+  group.append(svg('path', { class: 'strip-line', d: pathOf(runs(analysis.profile, p => p.probabilityRichardsonBelowQuarter), place, y) }));
+  return group;
+}
+
+/** A bar at each layer that grows; its length is the growth in ten minutes, in e-foldings, beside it the wavelength. */
+function growthStrip(analysis, x, width, y) {
+  const growing = analysis.layers.filter(l => isNumber(l.mode?.growthRatePerS));
+  const [group, place] = frame('e-foldings in 10 min', x, width, axis([0, 1, ...growing.map(l => l.mode.growthRatePerS * 600)]));
+  for (const layer of growing) {
+    const at = y((layer.baseHeightM + layer.topHeightM) / 2);
+    group.append(svg('rect', { class: 'strip-growth', x, y: at - 4, width: Math.max(1, place(layer.mode.growthRatePerS * 600) - x), height: 8 }),
+      text(x + width - 4, at - 8, `${fixed(layer.mode.wavelengthM / 1000, 1)} km`, '', 'end'));
+  }
+  if (growing.length === 0) group.append(text(x + width / 2, TOP + 16, 'nothing grows'));
+  return group;
+}
+
+/** What was solved for each layer; a layer without a growing wave says why. */
+function growthTable(analysis) {
+  if (analysis.layers.length === 0) return [];
+  const number = (value, digits) => (isNumber(value) ? fixed(value, digits) : '-');
+  const window = (layer, m) => layer.growthByWindow?.find(one => one.windowM === m);
+  const columns = [
+    ['Layer', l => l.letter], ['Wavelength, km', l => number(l.mode?.wavelengthM / 1000, 1)],
+    ...[200, 150, 100].map(m => [`E-folding, ${m} m window, min`, l => number(window(l, m)?.eFoldingMin, 1)]),
+    ['Waves along', l => (isNumber(l.mode?.azimuthDeg) ? `${String(Math.round(l.mode.azimuthDeg)).padStart(3, '0')}°` : '-')],
+    ['Phase speed, kt', l => (isNumber(l.mode?.phaseSpeedMs) ? fixed(msToKnots(l.mode.phaseSpeedMs), 0) : '-')],
+    ['Critical height, km', l => number(l.mode?.criticalHeightM / 1000, 2)], ['Billow height, m', l => number(l.billow?.heightM, 0)],
+    ['Crests pass a fixed point, s', l => number(l.billow?.passingIntervalS, 0)],
+    ['EDR, if it breaks', l => (isNumber(l.turbulence?.edrLow) ? `${fixed(l.turbulence.edrLow, 2)} to ${fixed(l.turbulence.edrHigh, 2)}` : '-')],
+  ];
+  const table = html('table', { class: 'ledger table' },
+    html('caption', {}, 'Growing waves, solved, at the three windows; billows and turbulence they would become.'),
+    html('thead', {}, html('tr', {}, ...columns.map(([name]) => html('th', { scope: 'col', class: 'num number' }, name)))),
+    html('tbody', {}, ...analysis.layers.map(layer => html('tr', {}, ...columns.map(([, value], k) =>
+      html(k === 0 ? 'th' : 'td', k === 0 ? { scope: 'row' } : { class: 'num number nowrap' }, value(layer)))))));
+  const said = analysis.layers.flatMap(l => [l.modeReason && `Layer ${l.letter}: ${l.modeReason}`, l.turbulence?.inWords && `Layer ${l.letter}: ${l.turbulence.inWords}`].filter(Boolean));
+  return [html('div', { class: 'ledger-scroll', tabindex: '0', role: 'region', 'aria-label': 'Growing waves' }, table),
+    html('ul', {}, ...said.map(note => html('li', {}, note)), html('li', {}, html('a', { href: '/method#growth' }, 'How growth is solved for, and why you may disagree')))];
+}
+
 function layerTable(analysis) {
   const window = `${fixed(analysis.method.windowM, 0)} m`;
   if (analysis.layers.length === 0) {
@@ -144,11 +189,11 @@ function layerTable(analysis) {
     [`Min Ri, ${window}`, l => richardsonText(l.minRichardson)], ['at', l => flightLevelText(l.minRichardsonFlightLevel)], ['Bulk Ri', l => richardsonText(l.bulkRichardson)],
     [`P(Ri < ¼), ${window}`, l => probabilityText(l.probabilityRichardsonBelowQuarter)], ['Shear, kt/1000 ft', l => shearText(l.shear1000FtKt)],
     ['Wind change, kt', l => fixed(msToKnots(l.windChangeMs), 0)], ['Wind', l => windText(l)],
-    ['Wavelength, km', l => (isNumber(l.rule?.wavelengthM) ? fixed(l.rule.wavelengthM / 1000, 1) : '-')],
-    ['E-folding, min', l => (isNumber(l.rule?.eFoldingMin) ? fixed(l.rule.eFoldingMin, 1) : 'stable')], ['State', l => l.state.toLowerCase().replaceAll('_', ' ')],
+    ['Wavelength by rule, km', l => (isNumber(l.rule?.wavelengthM) ? fixed(l.rule.wavelengthM / 1000, 1) : '-')],
+    ['E-folding by rule, min', l => (isNumber(l.rule?.eFoldingMin) ? fixed(l.rule.eFoldingMin, 1) : '-')], ['State', l => l.state.toLowerCase().replaceAll('_', ' ')],
   ];
   const table = html('table', { class: 'ledger table' },
-    html('caption', {}, `Layers, window ${window} (full width at half maximum). Wavelength and e-folding: ${analysis.layers[0].rule?.basis ?? 'rule, not solved'}.`),
+    html('caption', {}, `Layers, window ${window} (full width at half maximum). Wavelength and e-folding here are by the depth rule, not solved.`),
     html('thead', {}, html('tr', {}, ...columns.map(([name]) => html('th', { scope: 'col', class: 'num number' }, name)))),
     html('tbody', {}, ...analysis.layers.map(layer => html('tr', {}, ...columns.map(([, value], k) =>
       html(k === 0 ? 'th' : 'td', k === 0 ? { scope: 'row' } : { class: 'num number nowrap' }, value(layer)))))));
