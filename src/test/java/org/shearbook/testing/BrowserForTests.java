@@ -51,7 +51,8 @@ public final class BrowserForTests {
         if (!named.isBlank()) {
             return Optional.of(Path.of(named));
         }
-        Optional<Path> installed = installed();
+        // The switch shows on a machine with a browser what happens on one without.
+        Optional<Path> installed = Boolean.getBoolean("browser.ignoreInstalled") ? Optional.empty() : installed();
         if (installed.isPresent()) {
             return installed;
         }
@@ -74,9 +75,6 @@ public final class BrowserForTests {
     }
 
     private static Optional<Path> installed() {
-        if (Boolean.getBoolean("browser.ignoreInstalled")) {
-            return Optional.empty();
-        }
         return Stream.concat(NAMES.stream().flatMap(name -> onPath(name).stream()), ELSEWHERE.stream().map(Path::of).filter(Files::isExecutable)).findFirst();
     }
 
