@@ -22,7 +22,7 @@ import org.junit.jupiter.api.io.TempDir;
 
 /**
  * The desk as a process of its own, on its file database: killed in the middle of the play it goes on where it was
- * cut off; killed afterwards it stands where it stood.
+ * cut off; killed afterwards it stands where it stood. Its data folder is named relative to the working one, as by default.
  */
 class DemonstrationRestartTests {
 
@@ -60,7 +60,7 @@ class DemonstrationRestartTests {
     private void start(int port, String log) throws IOException {
         desk = new ProcessBuilder(Path.of(System.getProperty("java.home"), "bin", "java").toString(), "-Xmx512m",
                 "-cp", System.getProperty("java.class.path"), "org.shearbook.desk.ShearbookApplication",
-                "--spring.profiles.active=demo", "--server.port=" + port, "--shearbook.data-dir=" + folder.resolve("desk"))
+                "--spring.profiles.active=demo", "--server.port=" + port, "--shearbook.data-dir=" + Path.of("").toAbsolutePath().relativize(folder.resolve("desk")))
                 .redirectErrorStream(true).redirectOutput(folder.resolve(log).toFile()).start();
     }
 
