@@ -141,28 +141,37 @@ function probabilityStrip(analysis, x, width, y) {
 
 /** A bar at each layer that grows; its length is the growth in ten minutes, in e-foldings, beside it the wavelength. */
 function growthStrip(analysis, x, width, y) {
-  const growing = analysis.layers.filter(l => isNumber(l.mode?.growthRatePerS));
+  const growing = analysis.layers.filter(isSolved);
   const [group, place] = frame('e-foldings in 10 min', x, width, axis([0, 1, ...growing.map(l => l.mode.growthRatePerS * 600)]));
   for (const layer of growing) {
     const at = y((layer.baseHeightM + layer.topHeightM) / 2);
     group.append(svg('rect', { class: 'strip-growth', x, y: at - 4, width: Math.max(1, place(layer.mode.growthRatePerS * 600) - x), height: 8 }),
       text(x + width - 4, at - 8, `${fixed(layer.mode.wavelengthM / 1000, 1)} km`, '', 'end'));
   }
-  if (growing.length === 0) group.append(text(x + width / 2, TOP + 16, 'nothing grows'));
+  if (growing.length === 0) group.append(text(x + width / 2, TOP + 16, 'no growing wave found'));
   return group;
+}
+
+/** Whether the search for growing waves came to an end and found one. */
+function isSolved(layer) {
+  return layer.mode?.converged === true && isNumber(layer.mode.growthRatePerS);
 }
 
 /** What was solved for each layer; a layer without a growing wave says why. */
 function growthTable(analysis) {
   if (analysis.layers.length === 0) return [];
-  const number = (value, digits) => (isNumber(value) ? fixed(value, digits) : '-');
-  const window = (layer, m) => layer.growthByWindow?.find(one => one.windowM === m);
+  const number = (value, digits, per = 1) => (isNumber(value) ? fixed(value / per, digits) : '-');
+  const mode = layer => (isSolved(layer) ? layer.mode : null);
+  const atWindow = (layer, m) => {
+    const one = layer.growthByWindow?.find(other => other.windowM === m);
+    return isNumber(one?.eFoldingMin) ? fixed(one.eFoldingMin, 1) : one?.growthRatePerS === 0 ? 'stable' : 'unknown';
+  };
   const columns = [
-    ['Layer', l => l.letter], ['Wavelength, km', l => number(l.mode?.wavelengthM / 1000, 1)],
-    ...[200, 150, 100].map(m => [`E-folding, ${m} m window, min`, l => number(window(l, m)?.eFoldingMin, 1)]),
-    ['Waves along', l => (isNumber(l.mode?.azimuthDeg) ? `${String(Math.round(l.mode.azimuthDeg)).padStart(3, '0')}°` : '-')],
-    ['Phase speed, kt', l => (isNumber(l.mode?.phaseSpeedMs) ? fixed(msToKnots(l.mode.phaseSpeedMs), 0) : '-')],
-    ['Critical height, km', l => number(l.mode?.criticalHeightM / 1000, 2)], ['Billow height, m', l => number(l.billow?.heightM, 0)],
+    ['Layer', l => l.letter], ['Wavelength, km', l => number(mode(l)?.wavelengthM, 1, 1000)],
+    ...[200, 150, 100].map(m => [`E-folding, ${m} m window, min`, l => atWindow(l, m)]),
+    ['Waves along', l => (isNumber(mode(l)?.azimuthDeg) ? `${String(Math.round(l.mode.azimuthDeg)).padStart(3, '0')}°` : '-')],
+    ['Phase speed, kt', l => (isNumber(mode(l)?.phaseSpeedMs) ? fixed(msToKnots(l.mode.phaseSpeedMs), 0) : '-')],
+    ['Critical height, km', l => number(mode(l)?.criticalHeightM, 2, 1000)], ['Billow height, m', l => number(l.billow?.heightM, 0)],
     ['Crests pass a fixed point, s', l => number(l.billow?.passingIntervalS, 0)],
     ['EDR, if it breaks', l => (isNumber(l.turbulence?.edrLow) ? `${fixed(l.turbulence.edrLow, 2)} to ${fixed(l.turbulence.edrHigh, 2)}` : '-')],
   ];
@@ -171,7 +180,9 @@ function growthTable(analysis) {
     html('thead', {}, html('tr', {}, ...columns.map(([name]) => html('th', { scope: 'col', class: 'num number' }, name)))),
     html('tbody', {}, ...analysis.layers.map(layer => html('tr', {}, ...columns.map(([, value], k) =>
       html(k === 0 ? 'th' : 'td', k === 0 ? { scope: 'row' } : { class: 'num number nowrap' }, value(layer)))))));
-  const said = analysis.layers.flatMap(l => [l.modeReason && `Layer ${l.letter}: ${l.modeReason}`, l.turbulence?.inWords && `Layer ${l.letter}: ${l.turbulence.inWords}`].filter(Boolean));
+  const said = analysis.layers.flatMap(l => [l.modeReason ?? l.mode?.reason, l.probabilityUnknownBecause && `P(Ri < ¼) is unknown: ${l.probabilityUnknownBecause}`,
+    ...(l.growthByWindow ?? []).filter(one => one.reason && one.windowM !== analysis.method.windowM).map(one => `at ${fixed(one.windowM, 0)} m: ${one.reason}`)]
+    .filter(Boolean).map(note => `Layer ${l.letter}: ${note}`).concat([l.turbulence?.inWords && `Layer ${l.letter}: EDR ${l.turbulence.inWords}`].filter(Boolean)));
   return [html('div', { class: 'ledger-scroll', tabindex: '0', role: 'region', 'aria-label': 'Growing waves' }, table),
     html('ul', {}, ...said.map(note => html('li', {}, note)), html('li', {}, html('a', { href: '/method#growth' }, 'How growth is solved for, and why you may disagree')))];
 }
