@@ -22,6 +22,7 @@ import org.shearbook.desk.forecast.Forecast;
 import org.shearbook.desk.forecast.ForecastBook;
 import org.shearbook.desk.forecast.ForecastId;
 import org.shearbook.desk.shell.Moments;
+import org.shearbook.desk.layer.LayerBook;
 import org.shearbook.desk.sounding.SoundingArchive;
 import org.shearbook.desk.sounding.SoundingHeader;
 import org.shearbook.desk.sounding.SoundingId;
@@ -58,16 +59,18 @@ public class TimeHeightDisplay {
     private final AnalysisBook analyses;
     private final ForecastBook forecasts;
     private final AirReportArchive reports;
+    private final LayerBook layers;
     private final TimeHeightSettings settings;
     private final Clock clock;
 
     TimeHeightDisplay(StationBook stations, SoundingArchive soundings, AnalysisBook analyses, ForecastBook forecasts, AirReportArchive reports,
-            TimeHeightSettings settings, Clock clock) {
+            LayerBook layers, TimeHeightSettings settings, Clock clock) {
         this.stations = stations;
         this.soundings = soundings;
         this.analyses = analyses;
         this.forecasts = forecasts;
         this.reports = reports;
+        this.layers = layers;
         this.settings = settings;
         this.clock = clock;
     }
@@ -186,7 +189,7 @@ public class TimeHeightDisplay {
     }
 
     private List<TimeHeight.Column> columns(Station station, TimeShown time, AsKnownAt asKnownAt) {
-        List<SoundingHeader> found = soundings.between(station.id(), time.from().minus(settings.carried()).minus(LONGEST_ASCENT),
+        List<SoundingHeader> found = soundings.between(station.id(), time.from().minus(layers.evidenceLasts()).minus(LONGEST_ASCENT),
                 time.until().plus(RELEASE_BEFORE_NOMINAL), asKnownAt);
         List<SoundingId> ids = found.stream().map(SoundingHeader::id).toList();
         Map<SoundingId, AnalysisSummary> summaries = analyses.summaries(ids, asKnownAt);
@@ -206,7 +209,7 @@ public class TimeHeightDisplay {
             List<Long> coarser) {
         Instant nominal = nominalOf(header);
         Instant launched = header.launchedAt() == null ? nominal.minus(RELEASE_BEFORE_NOMINAL) : header.launchedAt();
-        Instant carriedUntil = nominal.plus(settings.carried());
+        Instant carriedUntil = nominal.plus(layers.evidenceLasts());
         String reason = summary == null ? "no analysis is kept" : summary.notAnalysed();
         if (reason == null && (analysed == null || analysed.size() < 2)) {
             reason = "fewer than two levels have a flight level";

@@ -9,12 +9,11 @@ import org.springframework.boot.context.properties.bind.DefaultValue;
 /**
  * How the display is drawn.
  *
- * @param carried how long after its nominal hour a sounding still says something of the air
  * @param shifts  when the office's shifts begin, UTC, in the order of the day
  * @param longest the longest time one picture may show
  */
 @ConfigurationProperties("shearbook.time-height")
-record TimeHeightSettings(@DefaultValue("6h") Duration carried, @DefaultValue({"06:00", "18:00"}) List<LocalTime> shifts,
+record TimeHeightSettings(@DefaultValue({"06:00", "18:00"}) List<LocalTime> shifts,
         @DefaultValue("31d") Duration longest) {
 
     TimeHeightSettings {

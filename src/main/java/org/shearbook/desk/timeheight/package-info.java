@@ -5,7 +5,7 @@
  * <p><b>Door.</b> None for other rooms: a small display on another page embeds {@code frontend/timeheight/display}
  * over {@code /api/v1/time-height}. <b>News.</b> None. <b>Tables.</b> None.
  */
-@ApplicationModule(displayName = "Time–height", allowedDependencies = {"audit", "shell", "station", "sounding", "analysis", "forecast", "airreport", "profile", "decode"})
+@ApplicationModule(displayName = "Time–height", allowedDependencies = {"audit", "shell", "station", "sounding", "analysis", "layer", "forecast", "airreport", "profile", "decode"})
 @NullMarked
 package org.shearbook.desk.timeheight;
 
